@@ -1,0 +1,23 @@
+import next from 'eslint-config-next/core-web-vitals';
+import nextTypescript from 'eslint-config-next/typescript';
+import prettier from 'eslint-config-prettier';
+
+const config = [
+  ...next,
+  ...nextTypescript,
+  prettier,
+  { ignores: ['.next/**', '.data/**', 'next-env.d.ts'] },
+  {
+    files: ['**/*.ts', '**/*.tsx'],
+    rules: {
+      '@typescript-eslint/no-explicit-any': 'error',
+      '@typescript-eslint/ban-ts-comment': 'error',
+      'no-console': 'error',
+      eqeqeq: ['error', 'always', { null: 'ignore' }],
+    },
+  },
+  // Commands speak to the terminal; everything else speaks through the log.
+  { files: ['lib/cli/**', 'db/cli/**', 'tests/**', 'lib/**/cli.ts'], rules: { 'no-console': 'off' } },
+];
+
+export default config;
