@@ -41,16 +41,23 @@ export class Conflict extends Refusal {
   readonly title = 'This does not fit what is stored';
 }
 
-/** Somebody, perhaps you on another device, saved in between. Nothing was overwritten. */
+/**
+ * Somebody, perhaps you on another device, saved in between. Nothing was overwritten. `revision` is the one that stands
+ * now, null where the thing was removed.
+ */
 export class Stale extends Refusal {
   readonly status = 412;
   readonly title = 'Changed in between';
   override readonly extra: Record<string, unknown>;
   override readonly headers: Record<string, string>;
-  constructor(revision: number) {
-    super(`This was saved in between; it now stands at revision ${revision}. Read it again and decide.`);
+  constructor(revision: number | null) {
+    super(
+      revision === null
+        ? 'This was removed in between; nothing stands at this address now.'
+        : `This was saved in between; it now stands at revision ${revision}. Read it again and decide.`,
+    );
     this.extra = { revision };
-    this.headers = { etag: `"${revision}"` };
+    this.headers = revision === null ? {} : { etag: `"${revision}"` };
   }
 }
 
