@@ -17,7 +17,7 @@ export default defineConfig({
           name: 'integration',
           include: ['tests/integration/**/*.test.ts'],
           globalSetup: ['tests/integration/setup/server.ts'],
-          setupFiles: ['tests/integration/setup/database.ts'],
+          setupFiles: ['tests/integration/setup/next-headers.ts', 'tests/integration/setup/database.ts'],
           testTimeout: 30_000,
           hookTimeout: 60_000,
           maxWorkers: 2,
