@@ -3,7 +3,7 @@ import type { Knex } from 'knex';
 export async function up(knex: Knex): Promise<void> {
   await knex.raw(`
     CREATE TABLE IF NOT EXISTS revisions (
-      id BIGINT UNSIGNED NOT NULL AUTO_INCREMENT PRIMARY KEY,
+      id INT UNSIGNED NOT NULL AUTO_INCREMENT PRIMARY KEY,
       entry_id UUID NOT NULL,
       number INT UNSIGNED NOT NULL,
       author_id UUID NOT NULL,

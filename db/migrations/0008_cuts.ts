@@ -3,7 +3,7 @@ import type { Knex } from 'knex';
 export async function up(knex: Knex): Promise<void> {
   await knex.raw(`
     CREATE TABLE IF NOT EXISTS cuts (
-      revision_id BIGINT UNSIGNED NOT NULL PRIMARY KEY,
+      revision_id INT UNSIGNED NOT NULL PRIMARY KEY,
       date DATE NULL,
       date_approximate ENUM('month', 'season') NULL,
       kind ENUM('heading', 'reduction', 'thinning', 'pollarding', 'coppicing', 'none') NULL,

@@ -3,7 +3,7 @@ import type { Knex } from 'knex';
 export async function up(knex: Knex): Promise<void> {
   await knex.raw(`
     CREATE TABLE IF NOT EXISTS readings (
-      revision_id BIGINT UNSIGNED NOT NULL,
+      revision_id INT UNSIGNED NOT NULL,
       id UUID NOT NULL,
       revision INT UNSIGNED NOT NULL DEFAULT 1,
       date DATE NULL,

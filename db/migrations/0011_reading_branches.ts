@@ -3,7 +3,7 @@ import type { Knex } from 'knex';
 export async function up(knex: Knex): Promise<void> {
   await knex.raw(`
     CREATE TABLE IF NOT EXISTS reading_branches (
-      revision_id BIGINT UNSIGNED NOT NULL,
+      revision_id INT UNSIGNED NOT NULL,
       reading_id UUID NOT NULL,
       branch SMALLINT UNSIGNED NOT NULL CHECK (branch BETWEEN 1 AND 500),
       shoots SMALLINT UNSIGNED NULL CHECK (shoots <= 999),

@@ -1,0 +1,25 @@
+import { EntryParams, findToChange } from '@/lib/entries/routes';
+import { EntryView } from '@/lib/entries/schema';
+import { submitEntry } from '@/lib/entries/submit';
+import { entryViews } from '@/lib/entries/view';
+import { findEntry } from '@/lib/entries/visibility';
+import { handler, json, route } from '@/lib/http/handler';
+
+export const { GET, HEAD, POST, PUT, PATCH, DELETE, OPTIONS } = route({
+  POST: handler(
+    {
+      as: 'grower',
+      summary: 'Send an entry of yours to the bench',
+      params: EntryParams,
+      output: EntryView,
+      find: findToChange,
+    },
+    async ({ db, actor, params, subject, audit }) => {
+      await submitEntry(db, subject.row);
+      await audit({ action: 'entry.submitted', subject: { kind: 'entry', id: params.id } });
+      const now = await findEntry(db, actor, params.id);
+      const [view] = await entryViews(db, actor, [now]);
+      return json(view, { etag: now.shown.number });
+    },
+  ),
+});
