@@ -32,8 +32,8 @@ export interface Case {
 }
 
 /** The nine cases of a species, in the order they are shown: uncut has its tip and nothing else. */
-export const CASES: readonly Case[] = SEVERITY_CLASSES.flatMap((name) =>
-  name === 'uncut' ? [{ class: name, tip: 'kept' as const }] : TIPS.map((tip) => ({ class: name, tip })),
+export const CASES: readonly Case[] = SEVERITY_CLASSES.flatMap<Case>((name) =>
+  name === 'uncut' ? [{ class: name, tip: 'kept' }] : TIPS.map((tip) => ({ class: name, tip })),
 );
 
 /** A severity as it is stored: six decimals. */
