@@ -1,12 +1,14 @@
 import type { Knex } from 'knex';
 
+/** One row a try, so that a limit holds over any quarter of an hour and not from one fixed start to the next. */
 export async function up(knex: Knex): Promise<void> {
   await knex.raw(`
     CREATE TABLE IF NOT EXISTS tries (
-      \`key\` VARCHAR(255) NOT NULL PRIMARY KEY,
-      points INT NOT NULL DEFAULT 0,
-      expire BIGINT UNSIGNED NULL,
-      KEY tries_expire (expire)
+      id BIGINT UNSIGNED NOT NULL AUTO_INCREMENT PRIMARY KEY,
+      subject VARCHAR(100) CHARACTER SET ascii NOT NULL,
+      expires_at BIGINT UNSIGNED NOT NULL,
+      KEY tries_subject (subject, expires_at),
+      KEY tries_expired (expires_at)
     )
   `);
 }

@@ -1,0 +1,6 @@
+/** Runs once in the server's process, before it answers anything. */
+export async function register(): Promise<void> {
+  if (process.env['NEXT_RUNTIME'] !== 'nodejs') return;
+  const { markSocketAddresses } = await import('@/lib/http/address');
+  markSocketAddresses();
+}
