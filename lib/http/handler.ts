@@ -54,6 +54,8 @@ export type Spec<
   find?: (context: Omit<Context<As, P, Q, undefined, undefined>, 'subject' | 'body'>) => Promise<S>;
   /** Throws TooMany. */
   rate?: (request: NextRequest) => Promise<void>;
+  /** `none` where a change opens its own, because it waits for something else than the database. */
+  transaction?: 'none';
 };
 
 export type Answer = { status: number; data: unknown; headers: Record<string, string> } | Response;
@@ -82,7 +84,7 @@ export const nothing: Answer = { status: 204, data: undefined, headers: {} };
  */
 export function handler<As extends Anyone['as'], P = undefined, Q = undefined, B = undefined, S = undefined>(
   spec: Spec<As, P, Q, B, S>,
-  useCase: (context: Context<As, P, Q, B, S>) => Promise<Answer>,
+  act: (context: Context<As, P, Q, B, S>) => Promise<Answer>,
 ): Handler {
   const run: Handler = async (request, { params }) => {
     const requestId = request.headers.get('x-request-id') ?? crypto.randomUUID();
@@ -117,9 +119,10 @@ export function handler<As extends Anyone['as'], P = undefined, Q = undefined, B
         const body = spec.body
           ? parseBody(spec.body, request.headers.get('content-type'), bytes)
           : (undefined as B);
-        return useCase({ ...context, subject, body });
+        return act({ ...context, subject, body });
       };
-      answer = present(spec, changing ? await database().transaction(work) : await work(database()));
+      const inTransaction = changing && spec.transaction !== 'none';
+      answer = present(spec, inTransaction ? await database().transaction(work) : await work(database()));
       for (const effect of effects) await effect();
     } catch (error) {
       answer = failed(error, requestId);

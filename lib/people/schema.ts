@@ -34,6 +34,9 @@ export const Password = z
   .max(LONGEST_PASSWORD, `must have at most ${LONGEST_PASSWORD} characters`)
   .refine((text) => !isCommonPassword(text), 'is among the first that a guesser tries; choose another');
 
+/** In the order of the form. */
+export const SIGN_UP_FIELDS = ['name', 'email', 'password'] as const;
+
 export const SignUp = z
   .strictObject({ email: Email, name: PersonName, password: Password })
   .superRefine(({ email, name, password }, context) => {

@@ -1,8 +1,10 @@
 import { v7 as newId } from 'uuid';
 import type { Db } from '@/lib/database';
 import { Conflict } from '@/lib/errors/errors';
+import { clientAddress } from '@/lib/http/address';
 import { hashPassword } from './passwords';
 import type { SignUp } from './schema';
+import { countTry, refuseWhenSpent, SIGN_UPS_FROM_ADDRESS } from './tries';
 
 const DUPLICATE = 1062;
 
@@ -26,4 +28,20 @@ export async function signUp(
     throw error;
   }
   return { id, name };
+}
+
+/**
+ * Makes a grower's account for whoever sent this request. Valid ones are counted for their address, also those whose
+ * e-mail has an account already, so that nobody can ask for many who has one.
+ * @throws TooMany, Conflict
+ */
+export async function signUpFrom(
+  db: Db,
+  body: SignUp,
+  headers: Headers,
+): Promise<{ id: string; name: string }> {
+  const address = clientAddress(headers);
+  await refuseWhenSpent(db, SIGN_UPS_FROM_ADDRESS, address);
+  await countTry(db, SIGN_UPS_FROM_ADDRESS, address);
+  return signUp(db, body);
 }
