@@ -9,9 +9,8 @@ export type Tip = (typeof TIPS)[number];
 /** So that a third by tape (0.3334) is still a third. */
 export const CLASS_TOLERANCE = 0.0005;
 
-/** Largest severity of each class; a fraction at a bound belongs to the lower class. */
+/** Largest severity of each class of cut; a fraction at a bound belongs to the lower class. */
 const UPPER_BOUND: readonly [SeverityClass, number][] = [
-  ['uncut', 0],
   ['light', 1 / 4],
   ['moderate', 1 / 3],
   ['heavy', 1 / 2],
@@ -42,11 +41,13 @@ export function roundSeverity(severity: number): number {
 }
 
 /**
- * The class of a severity from 0 to 1, compared with a tolerance of 0.0005.
+ * The class of a severity from 0 to 1, compared with a tolerance of 0.0005. Uncut is 0 alone, for it goes with
+ * kind none: the least nick is a light cut.
  * @throws RangeError for anything outside 0 to 1.
  */
 export function severityClass(severity: number): SeverityClass {
   if (!(severity >= 0 && severity <= 1)) throw new RangeError(`severity ${severity} is not between 0 and 1`);
+  if (roundSeverity(severity) === 0) return 'uncut';
   for (const [name, bound] of UPPER_BOUND) {
     if (roundSeverity(severity - bound) <= CLASS_TOLERANCE) return name;
   }

@@ -14,7 +14,7 @@ const fraction = fc.double({ min: 0, max: 1, noNaN: true });
 describe('the class of a severity', () => {
   it.each([
     [0, 'uncut'],
-    [0.001, 'light'],
+    [0.0003, 'light'],
     [0.25, 'light'],
     [0.2505, 'light'],
     [0.250501, 'moderate'],
