@@ -6,6 +6,7 @@ import { demoId } from './ids';
 import type { OrchardsWork } from './orchards-work';
 import type { Random } from './random';
 import { ringSpecies } from './species';
+import { notebookTitle } from './titles';
 import type { DemoEntry, DemoOrchard } from './types';
 
 /**
@@ -36,7 +37,7 @@ export function writeTwice(
     readBy: readings.map(() => owner),
     content: {
       ...content,
-      title: random.chance(0.5) ? content.title : `${label ?? 'Tree'}, from the notebook`,
+      title: random.chance(0.5) ? content.title : notebookTitle(ringSpecies(content.species ?? '')),
       orchard: other?.id ?? content.orchard,
       tree,
       cut: { ...content.cut, date, ...fromMemory(random, entry) },

@@ -7,6 +7,7 @@ import { TREE_SPOTS } from './names';
 import type { Random } from './random';
 import type { Ring } from './ring';
 import type { RingSpecies } from './species';
+import { titleOf } from './titles';
 import type { DemoEntry, DemoOrchard, DemoTree } from './types';
 
 /** How far back the demo reaches, and how close to today an accepted entry was last read. */
@@ -69,16 +70,17 @@ export class OrchardsWork {
     species: RingSpecies,
     date: string,
   ): EntryContent {
+    const cut = drawCut(random, species, date);
     const place = { ...orchard.place };
     if (random.chance(0.15)) place.sun = random.pick(['full', 'part', 'shade'] as const);
     return {
-      title: random.chance(0.94) ? titleOf(random, tree) : null,
+      title: random.chance(0.94) ? titleOf(random, species, cut) : null,
       species: species.slug,
       cultivar: tree.cultivar,
       orchard: orchard.id,
       tree: tree.id,
       place: { ...place, elevation: random.chance(0.9) ? orchard.elevationM : null },
-      cut: drawCut(random, species, date),
+      cut,
       readings: [],
       doc: { type: 'doc', content: [] },
       schemaVersion: 1,
@@ -133,16 +135,4 @@ function freshLabel(random: Random, species: RingSpecies, taken: ReadonlySet<str
     if (!taken.has(label)) return label;
   }
   return `${name} ${taken.size + 31}`;
-}
-
-function titleOf(random: Random, { label }: DemoTree): string {
-  return random.weighted(
-    [
-      label,
-      `${label}, another look`,
-      `${label}: what came`,
-      `Cut on ${label.charAt(0).toLowerCase()}${label.slice(1)}`,
-    ],
-    (title) => (title === label ? 7 : 1),
-  );
 }
