@@ -13,6 +13,9 @@ const config = [
       '@typescript-eslint/no-explicit-any': 'error',
       '@typescript-eslint/ban-ts-comment': 'error',
       'no-console': 'error',
+      // Plain links and plain navigation: a page is readable without a script, and fetches nothing before it is asked.
+      '@next/next/no-html-link-for-pages': 'off',
+      '@next/next/no-location-assign-relative-destination': 'off',
       eqeqeq: ['error', 'always', { null: 'ignore' }],
     },
   },

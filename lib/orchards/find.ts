@@ -1,4 +1,5 @@
 import type { Db } from '@/lib/database';
+import { Uuid } from '@/lib/entries/schema';
 import { Forbidden, NotFound } from '@/lib/errors/errors';
 import type { Actor } from '@/lib/people/actor';
 import { mayChangeOrchard, mayReadOrchard } from '@/lib/policy/policy';
@@ -35,4 +36,11 @@ export async function findOwnOrchard(db: Db, actor: Actor, id: string): Promise<
   const orchard = await findOwnOrchardIfAny(db, actor, id);
   if (!orchard) throw new NotFound();
   return orchard;
+}
+
+/** The orchard at a page's address, for one of its members; else null. */
+export async function orchardForPage(db: Db, actor: Actor | null, id: string): Promise<StoredOrchard | null> {
+  const known = Uuid.safeParse(id);
+  const orchard = known.success ? await readOrchard(db, known.data) : null;
+  return orchard && mayReadOrchard(actor, orchard.facts) ? orchard : null;
 }

@@ -27,7 +27,7 @@ export async function listPeople(db: Db, { q, limit, cursor }: PeopleQuery): Pro
   const wanted = q?.trim();
   if (wanted) {
     const part = `%${wanted.replace(/[\\%_]/g, '\\$&')}%`;
-    query.where((any) => any.whereLike('email', part).orWhereLike('name', part));
+    query.where((any) => any.where('email', 'like', part).orWhere('name', 'like', part));
   }
   const rows = await query;
   const items = rows.slice(0, limit).map(asPerson);
