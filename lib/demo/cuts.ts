@@ -43,16 +43,20 @@ const DEPTHS: readonly [Exclude<SeverityClass, 'uncut'>, number, [number, number
   ['heavy', 32, [0.35, 0.5]],
   ['severe', 18, [0.53, 0.88]],
 ];
-const AIMS: readonly [NonNullable<CutContent['aim']>, number][] = [
-  ['size', 26],
-  ['width', 14],
-  ['fruit', 20],
-  ['shade', 9],
-  ['shape', 14],
-  ['health', 6],
-  ['rejuvenation', 9],
-  ['other', 2],
-];
+type Aim = NonNullable<CutContent['aim']>;
+const AIMS: Record<Aim, number> = {
+  size: 26,
+  width: 14,
+  fruit: 20,
+  shade: 9,
+  shape: 14,
+  health: 6,
+  rejuvenation: 9,
+  other: 2,
+};
+/** What a cut that leaves the tip on cannot be for, and what alone one to the head or the stool is for. */
+const NOT_WITH_TIP: ReadonlySet<Aim> = new Set(['size', 'rejuvenation', 'other']);
+const FOR_POLES_ALONE: ReadonlySet<Aim> = new Set(['shade', 'other']);
 
 /** A cut as one of the ring would make it on that day, every length to the centimetre. */
 export function drawCut(random: Random, species: RingSpecies, date: string): CutContent {
@@ -73,13 +77,14 @@ export function drawCut(random: Random, species: RingSpecies, date: string): Cut
     retainedLength: null,
     diameter: null,
     stage: stageOn(random, species, date),
-    aim: kind === 'none' ? null : random.chance(0.85) ? weigh(random, AIMS) : null,
+    aim: null,
   };
   if (cut.intensity !== null) cut.intensity = roundSeverity(cut.intensity);
   const lengthM = Math.min(4.5, Math.max(0.4, Math.exp(random.normal(Math.log(1.9), 0.38))));
   if (random.chance(0.6))
     cut.diameter = Math.round((0.009 + lengthM * 0.0165) * Math.exp(random.normal(0, 0.2)) * 1000) / 1000;
-  return { ...cut, ...depth(random, kind, lengthM) };
+  const made = { ...cut, ...depth(random, kind, lengthM) };
+  return { ...made, aim: drawAim(random, species, kind, made.tip) };
 }
 
 /** How willing the ring is to cut this species in that month, against one another: 0 to 1. */
@@ -105,7 +110,10 @@ function depth(
       kind === 'coppicing' ? random.whole(86, 96) / 100 : random.whole(70, 92) / 100,
     );
   }
-  const [name, , [low, high]] = random.weighted(DEPTHS, ([, share]) => share);
+  const [name, , [low, high]] = random.weighted(
+    DEPTHS.slice(0, kind === 'thinning' ? 2 : undefined),
+    ([, share]) => share,
+  );
   const share = low + (high - low) * random.uniform();
   const removed = kind === 'heading' ? random.chance(0.9) : kind === 'reduction' && random.chance(0.25);
   if (random.chance(0.14)) {
@@ -124,6 +132,16 @@ function depth(
     tip: 'kept',
     retainedLength: random.chance(0.8) ? centimetres(lengthM) : null,
   };
+}
+
+function drawAim(random: Random, species: RingSpecies, kind: Kind, tip: Tip): Aim | null {
+  if (kind === 'none' || random.chance(0.15)) return null;
+  const aims = (Object.keys(AIMS) as Aim[]).filter((aim) => {
+    if (aim === 'fruit' && !species.bears) return false;
+    if (kind === 'pollarding' || kind === 'coppicing') return FOR_POLES_ALONE.has(aim);
+    return tip === 'removed' || !NOT_WITH_TIP.has(aim);
+  });
+  return random.weighted(aims, (aim) => AIMS[aim]);
 }
 
 function byTape(lengthM: number, share: number): Partial<CutContent> & { severity: number; tip: Tip } {
@@ -152,8 +170,8 @@ function stageOn(random: Random, species: RingSpecies, date: string): Stage {
     return fruits && random.chance(0.3) ? 'fruiting' : 'growing';
   }
   if (month === 12 || month === 1) return 'dormant';
-  if (month === 2) return random.chance(0.75) ? 'dormant' : 'bud-break';
-  if (month === 3) return random.chance(0.6) ? 'bud-break' : 'flowering';
+  if (month === 2) return random.chance(0.85) ? 'dormant' : 'bud-break';
+  if (month === 3) return date.slice(8) <= '12' || random.chance(0.4) ? 'bud-break' : 'flowering';
   if (month >= 9 && fruits) return 'after-harvest';
   return fruits && month >= 7 && random.chance(0.4) ? 'fruiting' : 'growing';
 }

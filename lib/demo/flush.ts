@@ -40,11 +40,12 @@ export function drawReadings(
   );
   const thinAt = thinningVisit(random, days, content, hand.plain ?? false);
   const asTotal = !hand.plain && random.chance(0.06);
+  const reach = Math.exp(random.normal(0, 0.2));
   return days.map((day, visit) => {
     const mean = Math.exp(logMean(hand.seed, hand.entryId, hand.ownerId, content, day / 7));
     const counts = branches.map((branch) => countOf(random, branch, visit, mean));
     const reading = emptyReading(random, addDays(date, day), hand.today);
-    measure(random, reading, content, counts, day / 7, visit, branches);
+    measure(random, reading, content, { counts, weeks: day / 7, visit, branches, reach });
     if (visit === thinAt) thin(random, reading, branches, counts);
     return asTotal && !counts.includes(null) ? inTotal(reading, counts) : { ...reading, counts };
   });
@@ -73,20 +74,26 @@ function countOf(random: Random, branch: Branch, visit: number, mean: number): n
   return negativeBinomialQuantile(share, mean, TRUTH.theta);
 }
 
+/** One visit's counts, and how far this entry's shoots reach against their species' usual. */
+interface Visit {
+  readonly counts: readonly (number | null)[];
+  readonly weeks: number;
+  readonly visit: number;
+  readonly branches: readonly Branch[];
+  readonly reach: number;
+}
+
 function measure(
   random: Random,
   reading: Reading,
   content: EntryContent,
-  counts: readonly (number | null)[],
-  weeks: number,
-  visit: number,
-  branches: readonly Branch[],
+  { counts, weeks, visit, branches, reach }: Visit,
 ): void {
   const shoots = counts.reduce<number>((sum, count) => sum + (count ?? 0), 0);
   const vigourM = ringSpecies(content.species ?? '').vigourM;
   const cut = content.cut.tip === 'removed' ? 1 : 0.6;
   if (shoots > 0 && random.chance(0.65)) {
-    const lengthM = vigourM * cut * (1 - Math.exp(-weeks / 11)) * Math.exp(random.normal(0, 0.18));
+    const lengthM = vigourM * cut * (1 - Math.exp(-weeks / 11)) * reach;
     reading.longestShoot = Math.max(0.02, Math.round(lengthM * 100) / 100);
   }
   const died = branches.some((branch) => visit >= branch.deadFrom && visit < branch.lostFrom);

@@ -46,10 +46,7 @@ export const WHY: Parts<NonNullable<Cut['aim']>> = {
     'Either this wakes it or it comes out.',
     'The old framework is sound. The wood on it is tired.',
   ],
-  other: [
-    'We needed the poles.',
-    'The wire had to be cleared, and we left the line itself to those who may.',
-  ],
+  other: ['We needed the poles.', 'A neighbour asked for scion wood.'],
 };
 
 export const CUT_MADE: Parts<NonNullable<Cut['kind']>> = {
@@ -87,6 +84,16 @@ export const CUT_MADE: Parts<NonNullable<Cut['kind']>> = {
     'Left alone on purpose. The tape is all it got.',
   ],
 };
+
+/** A heading that spared the branch's own tip. */
+export const SIDES_HEADED = [
+  'Headed the side growth and let the branch itself run on.',
+  'The side shoots shortened all along; the end is as it was.',
+  'Shortened what grows from the sides, nothing else.',
+];
+
+/** Sentences for trees that are grown for something to pick. */
+export const ABOUT_CROPS = /pick|fruit|bear|crop|carried|reach|arm/;
 
 /** Where one branch alone was marked. */
 export const ONE_BRANCH = [

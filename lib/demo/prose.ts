@@ -1,5 +1,6 @@
 import type { EntryContent, Reading } from '@/lib/entries/schema';
 import {
+  ABOUT_CROPS,
   CUT_MADE,
   LESSON,
   ONE_BRANCH,
@@ -7,6 +8,7 @@ import {
   SAP_GENERA,
   SAP_SAID,
   SEEN,
+  SIDES_HEADED,
   TIP_LEFT,
   WHY,
 } from './prose-parts';
@@ -89,18 +91,26 @@ function bullets(said: readonly string[]): DocNode[] {
 
 /** Why, how and where, from what is known of them. */
 function sentences(random: Random, { cut, place, species }: EntryContent): string[] {
-  const tree = species === null ? 'tree' : ringSpecies(species).name;
+  const grown = species === null ? null : ringSpecies(species);
   const said: string[] = [];
-  if (cut.aim) said.push(random.pick(WHY[cut.aim]).replace('{tree}', tree));
+  const reasons = cut.aim ? WHY[cut.aim].filter((reason) => grown?.bears || !ABOUT_CROPS.test(reason)) : [];
+  if (reasons.length > 0) said.push(random.pick(reasons).replace('{tree}', grown?.name ?? 'tree'));
   const alone = cut.branches === 1;
-  if (cut.kind) said.push(random.pick(alone ? ONE_BRANCH : CUT_MADE[cut.kind]));
+  if (cut.kind) said.push(random.pick(alone ? ONE_BRANCH : howMade(cut.kind, cut.tip)));
   if (!alone && cut.tip && cut.kind !== 'none' && cut.kind !== 'coppicing' && random.chance(0.5))
     said.push(random.pick(TIP_LEFT[cut.tip]));
-  const wet = cut.kind !== 'none' && species !== null && SAP_GENERA.has(ringSpecies(species).genus);
+  const wet = cut.kind !== 'none' && SAP_GENERA.has(grown?.genus ?? '');
   if (wet && random.chance(0.35)) said.push(random.pick(SAP_SAID));
   const where = random.pick(['sun', 'water', 'wind'] as const);
   if (random.chance(0.35)) said.push(...placeSaid(random, where, place));
   return said;
+}
+
+function howMade(
+  kind: NonNullable<EntryContent['cut']['kind']>,
+  tip: EntryContent['cut']['tip'],
+): readonly string[] {
+  return kind === 'heading' && tip === 'kept' ? SIDES_HEADED : CUT_MADE[kind];
 }
 
 function placeSaid(random: Random, where: 'sun' | 'water' | 'wind', place: EntryContent['place']): string[] {

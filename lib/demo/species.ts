@@ -19,6 +19,8 @@ export interface RingSpecies {
   readonly grown: number;
   /** Length of a strong shoot by the end of a season, metres. */
   readonly vigourM: number;
+  /** Whether it is grown for something to pick. */
+  readonly bears: boolean;
   readonly cultivars: readonly string[];
 }
 
@@ -35,6 +37,16 @@ type Short = [
   cultivars?: string,
 ];
 type Habit = Pick<RingSpecies, 'leaf' | 'resprouts' | 'fromOldWood'>;
+
+const NOT_FOR_PICKING = new Set([
+  'salix',
+  'gliricidia',
+  'erythrina',
+  'alnus',
+  'grevillea',
+  'tilia',
+  'betula',
+]);
 
 const FREE_EVERGREEN: Habit = { leaf: 'evergreen', resprouts: 'freely', fromOldWood: 'yes' };
 const FREE_LEAFLESS: Habit = { leaf: 'deciduous', resprouts: 'freely', fromOldWood: 'yes' };
@@ -131,6 +143,7 @@ function grown([slug, wood, name, share, vigourM, cultivars]: Short, band: Band,
     ...habit,
     grown: share,
     vigourM,
+    bears: !NOT_FOR_PICKING.has(genus),
     cultivars: cultivars?.split(';') ?? [],
   };
 }

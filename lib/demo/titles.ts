@@ -15,7 +15,7 @@ const DONE = {
 const HOW_DEEP = {
   uncut: '',
   light: ' lightly',
-  moderate: ' with measure',
+  moderate: ' moderately',
   heavy: ' hard',
   severe: ' very hard',
 } as const;
@@ -43,7 +43,9 @@ export function titleOf(random: Random, species: RingSpecies, cut: CutContent): 
   const choices = [
     `${name}, ${done}${deep}`,
     `${name}, ${done} in ${month}`,
-    cut.aim && kind !== 'none' ? `${name}: ${WANTED[cut.aim]}` : `${name}, ${month}`,
+    cut.aim && kind !== 'none'
+      ? `${name}: ${cut.aim === 'size' && !species.bears ? 'brought down' : WANTED[cut.aim]}`
+      : `${name}, ${month}`,
     cut.tip === 'kept' && kind !== 'none' ? `${name}, tips left on` : `${name}, ${done}`,
     `${month}, ${species.name}`,
   ];

@@ -196,6 +196,23 @@ describe('the record has the faults and the gaps a real one has', () => {
     expect(perTree.length).toBeLessThanOrEqual(9);
   });
 
+  it('shoots grow from visit to visit until they are thinned', () => {
+    for (const { content, origin } of read) {
+      if (origin === 'handwritten') continue;
+      const lengths = content.readings.flatMap(({ longestShoot }) =>
+        longestShoot === null ? [] : [longestShoot],
+      );
+      expect(lengths).toEqual([...lengths].sort((a, b) => a - b));
+    }
+  });
+
+  it('no osier is cut for its fruit, and no tip is kept on a tree brought down', () => {
+    for (const { content } of read) {
+      if (content.species?.startsWith('salix')) expect(content.cut.aim).not.toBe('fruit');
+      if (content.cut.tip === 'kept') expect(['size', 'other']).not.toContain(content.cut.aim);
+    }
+  });
+
   it('prose varies: of the entries that say something, nine in ten say it in their own words', () => {
     const texts = read.map(({ content }) =>
       [...JSON.stringify(content.doc).matchAll(/"text":"([^"]*)"/g)].map((match) => match[1]).join(' '),
