@@ -6,7 +6,7 @@ const config = [
   ...next,
   ...nextTypescript,
   prettier,
-  { ignores: ['.next/**', '.data/**', 'next-env.d.ts'] },
+  { ignores: ['.next/**', '.next-test/**', '.data/**', 'next-env.d.ts'] },
   {
     files: ['**/*.ts', '**/*.tsx'],
     rules: {

@@ -10,7 +10,10 @@ export default defineConfig({
   test: {
     projects: [
       { extends: true, test: { name: 'unit', include: ['tests/unit/**/*.test.{ts,tsx}'] } },
-      { extends: true, test: { name: 'reference', include: ['tests/reference/**/*.test.ts'], testTimeout: 60_000 } },
+      {
+        extends: true,
+        test: { name: 'reference', include: ['tests/reference/**/*.test.ts'], testTimeout: 60_000 },
+      },
       {
         extends: true,
         test: {

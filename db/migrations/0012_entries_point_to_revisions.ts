@@ -6,7 +6,7 @@ const POINTERS = ['working_id', 'waiting_id', 'accepted_id'] as const;
 export async function up(knex: Knex): Promise<void> {
   const keys = POINTERS.map(
     (pointer) =>
-      `ADD CONSTRAINT entries_${pointer}_fk FOREIGN KEY IF NOT EXISTS (${pointer}) REFERENCES revisions (id) ON DELETE SET NULL`,
+      `ADD CONSTRAINT entries_${pointer}_fk FOREIGN KEY IF NOT EXISTS (${pointer}) REFERENCES revisions (id)`,
   );
   await knex.raw(`ALTER TABLE entries ${keys.join(', ')}`);
 }

@@ -1,6 +1,6 @@
 import type { FieldError } from '@/lib/errors/errors';
 import { SCHEMA_VERSION } from '@/lib/documents/schema';
-import { severityClass } from '@/lib/severity/severity';
+import { markThinned } from '@/lib/seen/reading';
 import type { Cut, EntryContent, Reading } from './schema';
 
 const DAY_MS = 86_400_000;
@@ -34,7 +34,7 @@ export function contradictions(content: EntryContent, now = new Date()): FieldEr
 
 function cutContradictions(cut: Cut): FieldError[] {
   const errors: FieldError[] = [];
-  const uncut = cut.severity !== null && severityClass(cut.severity) === 'uncut';
+  const uncut = cut.severity === 0;
   if (uncut && cut.severity !== 0) {
     errors.push({
       path: 'cut.severity',
@@ -122,9 +122,9 @@ export function readingLacks(reading: Reading, path: string): FieldError[] {
 
 /** Ids of readings taken after flush was removed at an earlier visit; they stay out of every summary. */
 export function thinnedReadings(readings: readonly Pick<Reading, 'id' | 'date' | 'removed'>[]): Set<string> {
-  const first = readings
-    .filter((reading) => (reading.removed ?? 0) > 0 && reading.date)
-    .map((reading) => reading.date as string)
-    .sort()[0];
-  return new Set(readings.filter(({ date }) => first && date && date > first).map(({ id }) => id));
+  const dated = readings.flatMap(({ id, date, removed }) =>
+    date === null ? [] : [{ id, removed, daysAfterCut: Date.parse(date) / DAY_MS }],
+  );
+  const thinned = markThinned(dated);
+  return new Set(dated.filter((_, index) => thinned[index]).map(({ id }) => id));
 }

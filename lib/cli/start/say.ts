@@ -1,0 +1,11 @@
+/** What the start command says goes to standard output, a line a thing. */
+export function say(line: string): void {
+  console.log(line);
+}
+
+/** One line for what a person can mend; the stack only where it is our fault. */
+export function plainReason(error: unknown): string {
+  if (!(error instanceof Error)) return String(error);
+  const isOurs = error.name !== 'Error' || 'code' in error;
+  return isOurs ? (error.stack ?? error.message) : error.message;
+}
