@@ -5,7 +5,7 @@ import { env } from '@/lib/env';
 import { log } from '@/lib/log/log';
 import { authSecret } from './auth-settings';
 import { ownPath } from './own-path';
-import { checkPassword, type SignedIn } from './sign-in';
+import { checkPassword, WrongCredentials, type SignedIn } from './sign-in';
 import { activePerson } from './table';
 
 declare module 'next-auth/jwt' {
@@ -48,10 +48,12 @@ export function authRun(address: string): AuthRun {
   const provider = Credentials({
     name: 'E-mail and password',
     credentials: { email: { type: 'email' }, password: { type: 'password' } },
-    async authorize(given): Promise<SignedIn | null> {
+    async authorize(given): Promise<SignedIn> {
       try {
         const { email, password } = { email: '', password: '', ...given };
-        return await checkPassword(database(), String(email), String(password), address);
+        const person = await checkPassword(database(), String(email), String(password), address);
+        if (!person) throw new WrongCredentials();
+        return person;
       } catch (error) {
         run.failure = error;
         throw error;

@@ -1,7 +1,7 @@
 import type { NextApiRequest, NextApiResponse } from 'next';
 import NextAuth from 'next-auth';
 import { env } from '@/lib/env';
-import { Forbidden, Refusal } from '@/lib/errors/errors';
+import { Forbidden } from '@/lib/errors/errors';
 import { authRun, ownOrigins } from './auth-options';
 import { ownPath } from './own-path';
 
@@ -24,15 +24,6 @@ export type AuthAnswer = {
   /** Where the browser is sent next, on this site. */
   location: string | null;
 };
-
-/** For a wrong password, an unknown address and a disabled account alike. */
-export class WrongCredentials extends Refusal {
-  readonly status = 401;
-  readonly title = 'Not signed in';
-  constructor() {
-    super('This e-mail address and this password do not go together.');
-  }
-}
 
 /**
  * Asks next-auth, through its interface for API routes: that one takes cookies and form as they are given to it, so that
@@ -63,7 +54,6 @@ function settled(answer: AuthAnswer): AuthAnswer {
   if (sentTo.endsWith('?csrf=true')) {
     throw new Forbidden('Send the csrfToken that GET /api/auth/csrf gives, with the cookie it sets.');
   }
-  if (answer.status === 401) throw new WrongCredentials();
   if (answer.headers.has('location')) {
     answer.location = ownPath(answer.headers.get('location'), ownOrigins());
     answer.headers.delete('location');

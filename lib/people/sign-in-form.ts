@@ -2,8 +2,9 @@ import type { NextRequest } from 'next/server';
 import { Forbidden, Refusal, TooMany } from '@/lib/errors/errors';
 import { clientAddress } from '@/lib/http/address';
 import { ownOrigins } from './auth-options';
-import { askNextAuth, WrongCredentials } from './next-auth';
+import { askNextAuth } from './next-auth';
 import { ownPath } from './own-path';
+import { WrongCredentials } from './sign-in';
 import { keepTyped } from './typed';
 
 /** Sends a browser on after a form, to be fetched with GET. */

@@ -1,10 +1,20 @@
 import type { Db } from '@/lib/database';
+import { Refusal } from '@/lib/errors/errors';
 import { isPassword } from './passwords';
 import { writtenEmail } from './schema';
 import { countTry, forgetTries, refuseWhenSpent, WRONG_FOR_ACCOUNT, WRONG_FROM_ADDRESS } from './tries';
 import { inTurn } from './turns';
 
 export type SignedIn = { id: string; name: string; sessionVersion: number };
+
+/** For a wrong password, an unknown address and a disabled account alike. */
+export class WrongCredentials extends Refusal {
+  readonly status = 401;
+  readonly title = 'Not signed in';
+  constructor() {
+    super('This e-mail address and this password do not go together.');
+  }
+}
 
 /**
  * Whose password this is, or null: for a wrong password, an unknown address and a disabled account alike, in the same
