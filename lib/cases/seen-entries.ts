@@ -24,8 +24,8 @@ export async function seenEntries(db: Db, species: string): Promise<SeenEntry[]>
       .join('cuts', 'cuts.revision_id', 'entries.accepted_id')
       .where('entries.status', 'accepted')
       .where('revisions.species', species);
-  const [entries, readings] = await Promise.all([
-    accepted().select<EntryRow[]>({
+  const [entries, readings]: [EntryRow[], ReadingRow[]] = await Promise.all([
+    accepted().select({
       revisionId: 'revisions.id',
       growerId: 'entries.owner_id',
       orchardId: 'revisions.orchard_id',
@@ -43,7 +43,7 @@ export async function seenEntries(db: Db, species: string): Promise<SeenEntry[]>
       )
       .groupBy('readings.revision_id', 'readings.id')
       .orderBy(['readings.revision_id', 'readings.date', 'readings.id'])
-      .select<ReadingRow[]>({
+      .select({
         revisionId: 'readings.revision_id',
         daysAfterCut: db.raw('DATEDIFF(readings.date, cuts.date)'),
         total: 'readings.total',

@@ -23,3 +23,9 @@ export function elevationForField(metres: number | null, units: Units): string {
   if (metres === null) return '';
   return String(Number((metres / (units === 'imperial' ? FOOT_M : 1)).toFixed(1)));
 }
+
+/** An elevation to read: "420 m", "1,380 ft". */
+export function formatElevation(metres: number, units: Units): string {
+  const value = Math.round(units === 'imperial' ? metres / FOOT_M : metres);
+  return `${value.toLocaleString('en-GB')} ${units === 'imperial' ? 'ft' : 'm'}`;
+}

@@ -2,7 +2,7 @@ import type { EntryContent, EntryView, Reading } from '@/lib/entries/schema';
 import type { FieldError } from '@/lib/errors/errors';
 import { contentOf, isOnlyAddedTo, newcomers, sameContent } from './content';
 import { withIds } from './paths';
-import type { Transport } from './transport';
+import type { Outcome, Transport } from './transport';
 import type { Written } from './to-content';
 
 /**
@@ -161,6 +161,11 @@ export class Saver {
     return theirs;
   }
 
+  /** Asks the bench to read what is saved. Asked twice, it is sent once. */
+  submit(): Promise<Outcome> {
+    return this.options.transport.submit(this.options.id);
+  }
+
   /** What the bench said is still missing. */
   showLacks(errors: readonly FieldError[]): void {
     this.update({ lacks: withIds(errors, this.base) });
@@ -220,10 +225,7 @@ export class Saver {
     return false;
   }
 
-  private stopAt(
-    outcome: Exclude<Awaited<ReturnType<Transport['put']>>, { kind: 'done' }>,
-    content: EntryContent,
-  ): false {
+  private stopAt(outcome: Exclude<Outcome, { kind: 'done' }>, content: EntryContent): false {
     const { problems } = this.options.write(this.base);
     this.keepCopy(content, problems);
     switch (outcome.kind) {
