@@ -122,7 +122,13 @@ export function handler<As extends Anyone['as'], P = undefined, Q = undefined, B
         return act({ ...context, subject, body });
       };
       const inTransaction = changing && spec.transaction !== 'none';
-      answer = present(spec, inTransaction ? await database().transaction(work) : await work(database()));
+      const done = inTransaction
+        ? await againAfterDeadlock(() => {
+            effects.length = 0;
+            return database().transaction(work);
+          })
+        : await work(database());
+      answer = present(spec, done);
       for (const effect of effects) await effect();
     } catch (error) {
       answer = failed(error, requestId);
@@ -207,7 +213,20 @@ function present(spec: { output?: z.ZodType }, answer: Answer): Response {
 
 const AWAY = new Set(['ECONNREFUSED', 'ECONNRESET', 'PROTOCOL_CONNECTION_LOST', 'ETIMEDOUT', 'ENOTFOUND']);
 const TOOK_TOO_LONG = 1969;
-const DEADLOCKS = new Set([1205, 1213]);
+const DEADLOCK = 1213;
+const LOCK_WAITS = new Set([1205, DEADLOCK]);
+const ATTEMPTS = 3;
+
+/** Of requests that wait for each other the database lets one go, undone as a whole; that one just goes again. */
+async function againAfterDeadlock<Result>(attempt: () => Promise<Result>): Promise<Result> {
+  for (let left = ATTEMPTS - 1; ; left -= 1) {
+    try {
+      return await attempt();
+    } catch (error) {
+      if (left === 0 || (error as { errno?: number }).errno !== DEADLOCK) throw error;
+    }
+  }
+}
 
 function failed(error: unknown, requestId: string): Response {
   if (error instanceof Refusal) return refused(error);
@@ -215,7 +234,7 @@ function failed(error: unknown, requestId: string): Response {
   if (
     (code && AWAY.has(code)) ||
     name === 'KnexTimeoutError' ||
-    (errno && DEADLOCKS.has(errno)) ||
+    (errno && LOCK_WAITS.has(errno)) ||
     errno === TOOK_TOO_LONG
   ) {
     log.warn({ requestId, code, errno }, 'database away or slow');
