@@ -1,15 +1,17 @@
 import type { Knex } from 'knex';
 import type { Env } from '@/lib/env';
 import { NOBODYS_HASH, hashPassword } from '@/lib/people/passwords';
+import { syncSpecies } from '@/lib/species/sync';
 import { generateDemo } from './generate';
 import { readHandwritten } from './handwritten';
 import { insertDemo } from './insert';
 
-const SEED = 20_260_101;
+/** Of the demo that `npm start` gives. */
+export const DEMO_SEED = 20_260_101;
 
 /**
- * Fills a database without people with the demo, in one transaction; does nothing where there is anybody, or with
- * DEMO off. The species table must be in step with the catalogue. The same on the same day.
+ * Brings the species table in step with the catalogue; then fills a database without people with the demo, in one
+ * transaction. Where there is anybody, or DEMO is off, nobody is added. The same on the same day.
  */
 export async function seedIfEmpty(
   db: Knex,
@@ -17,10 +19,11 @@ export async function seedIfEmpty(
   log: (line: string) => void,
   today: string = new Date().toISOString().slice(0, 10),
 ): Promise<void> {
+  for (const warning of await syncSpecies(db)) log(warning);
   if (!env.DEMO || (await db('people').first('id'))) return;
   log('Filling the empty database with the demo ...');
   const began = performance.now();
-  const demo = generateDemo({ seed: SEED, today, handwritten: readHandwritten() });
+  const demo = generateDemo({ seed: DEMO_SEED, today, handwritten: readHandwritten() });
   const moderator = demo.people.find(({ role }) => role === 'moderator');
   if (!moderator) throw new Error('the demo has no moderator');
   const demoHash = await hashPassword(env.DEMO_PASSWORD);
