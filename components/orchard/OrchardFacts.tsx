@@ -12,7 +12,10 @@ export function OrchardFacts({ content, units }: Props) {
   const unit = units === 'imperial' ? 'ft' : 'm';
   const rows: [string, string][] = [
     ['How it stands', sayPlace(place)],
-    ['Elevation', elevation === null ? 'not noted' : `${elevationForField(elevation, units)} ${unit}`],
+    [
+      'Elevation',
+      elevation === null ? 'not noted' : `${Math.round(Number(elevationForField(elevation, units)))} ${unit}`,
+    ],
     ['Time zone', timeZone],
   ];
   if (latitude !== null && longitude !== null) {

@@ -13,7 +13,7 @@ export function WhereIStand({ onPoint }: { onPoint: (latitude: string, longitude
     navigator.geolocation.getCurrentPosition(
       ({ coords }) => {
         onPoint(coords.latitude.toFixed(5), coords.longitude.toFixed(5));
-        setState(`Filled in, to about ${Math.ceil(coords.accuracy)} m.`);
+        setState(`Filled in, to about ${Math.max(1, Math.ceil(coords.accuracy))} m.`);
       },
       () => setState('The device did not tell its place. Type the point in.'),
       { enableHighAccuracy: true, timeout: 20_000, maximumAge: 60_000 },
