@@ -1,4 +1,5 @@
 import type { EntryContent, EntryView } from '@/lib/entries/schema';
+import { editable, trimmed, withoutReadings } from './document';
 
 /** A draft of nothing, in its stored shape. */
 export const EMPTY_CONTENT: EntryContent = {
@@ -30,6 +31,7 @@ export const EMPTY_CONTENT: EntryContent = {
 
 /** What its owner wrote, out of what the server tells of an entry. */
 export function contentOf(view: EntryView): EntryContent {
+  const ids = view.readings.map(({ id }) => id);
   return {
     title: view.title,
     species: view.species,
@@ -39,7 +41,8 @@ export function contentOf(view: EntryView): EntryContent {
     place: pick(view.place, EMPTY_CONTENT.place),
     cut: pick(view.cut, EMPTY_CONTENT.cut),
     readings: view.readings.map((reading) => pick(reading, EMPTY_READING_CONTENT)),
-    doc: view.doc,
+    // As this editor would store it, so that opening a record and looking at it changes nothing.
+    doc: trimmed(editable(view.doc, ids)),
     schemaVersion: 1,
   };
 }
@@ -83,7 +86,12 @@ export function isOnlyAddedTo(
   stored: EntryContent,
   added: EntryContent['readings'],
 ): boolean {
-  return sameContent({ ...known, readings: [...known.readings, ...added] }, stored);
+  const ids = added.map(({ id }) => id);
+  return sameContent(known, {
+    ...stored,
+    readings: stored.readings.filter(({ id }) => !ids.includes(id)),
+    doc: withoutReadings(stored.doc, ids),
+  });
 }
 
 /** JSON with sorted keys and without what is null, so that an absent field and an empty one are alike. */

@@ -17,6 +17,31 @@ export function withIds(errors: readonly FieldError[], content: EntryContent): F
   });
 }
 
+/** Of what the bench asked for, that which is still not there. */
+export function stillLacking(lacks: readonly FieldError[], content: EntryContent): readonly FieldError[] {
+  const left = lacks.filter(({ path }) => isMissing(path, content));
+  return left.length === lacks.length ? lacks : left;
+}
+
+function isMissing(path: string, content: EntryContent): boolean {
+  if (path === 'readings') return content.readings.length === 0;
+  const [, id, name = ''] = /^readings\.([^.]+)\.(\w+)/.exec(path) ?? [];
+  const reading = content.readings.find((one) => one.id === id);
+  if (id)
+    return (
+      reading !== undefined &&
+      valueAt(reading, name) === null &&
+      !(name === 'counts' && reading.total !== null)
+    );
+  const [group = '', field] = path.split('.');
+  const value = valueAt(content, group);
+  return (field && typeof value === 'object' && value !== null ? valueAt(value, field) : value) === null;
+}
+
+function valueAt(object: object, key: string): unknown {
+  return Object.entries(object).find(([name]) => name === key)?.[1] ?? null;
+}
+
 /** The field a path is shown at: the length of a list or one count of many stand at the field they are typed in. */
 export function fieldOf(path: string): string {
   const reading = /^readings\.([^.]+)\.(counts|total|branches)\b/.exec(path);

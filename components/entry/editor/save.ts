@@ -1,7 +1,7 @@
 import type { EntryContent, EntryView, Reading } from '@/lib/entries/schema';
 import type { FieldError } from '@/lib/errors/errors';
 import { contentOf, isOnlyAddedTo, newcomers, sameContent } from './content';
-import { withIds } from './paths';
+import { stillLacking, withIds } from './paths';
 import type { Outcome, Transport } from './transport';
 import type { Written } from './to-content';
 
@@ -69,6 +69,8 @@ export class Saver {
   private sent: readonly EntryContent[] = [];
   private timer: unknown = null;
   private pauseMs = FIRST_PAUSE_MS;
+  /** Looking at a record changes nothing, however its document is set out again to be edited. */
+  private isTouched = false;
   private running: Promise<void> | null = null;
   private readonly listeners = new Set<() => void>();
 
@@ -96,6 +98,7 @@ export class Saver {
 
   /** Something was typed: kept on the device now, sent after a short rest. */
   touch(): void {
+    this.isTouched = true;
     const { content, problems } = this.options.write(this.base);
     if (this.running === null && problems.length === 0 && sameContent(content, this.base) && this.isQuiet()) {
       this.options.keep(null);
@@ -110,6 +113,7 @@ export class Saver {
 
   /** Sends what is unsent now. Resolves to whether the server has everything that stands in the editor. */
   async flush({ keepalive = false } = {}): Promise<boolean> {
+    if (!this.isTouched) return true;
     if (this.current.phase === 'conflict' || this.current.phase === 'gone') return false;
     this.stopTimer();
     this.running ??= this.run(keepalive).finally(() => {
@@ -122,6 +126,7 @@ export class Saver {
 
   /** Opens with what was on the device and never arrived. Where the stored one moved on without it, that is a conflict. */
   resume(theirs: EntryView | null): void {
+    this.isTouched = true;
     const { content, problems } = this.options.write(this.base);
     this.keepCopy(content, problems);
     if (theirs) this.update({ phase: 'conflict', theirs });
@@ -148,6 +153,7 @@ export class Saver {
     const { theirs } = this.current;
     if (!theirs) return null;
     this.base = contentOf(theirs);
+    this.isTouched = false;
     this.sent = [];
     this.options.keep(null);
     this.update({
@@ -261,7 +267,7 @@ export class Saver {
 
   private keepCopy(content: EntryContent, problems: readonly FieldError[]): void {
     const onDevice = this.options.keep({ content, revision: this.current.revision, sent: this.sent });
-    this.update({ onDevice, problems });
+    this.update({ onDevice, problems, lacks: stillLacking(this.current.lacks, content) });
   }
 
   /** Nothing more is sent by itself: somebody has to look, or it is already being tried again at growing pauses. */

@@ -6,8 +6,11 @@ export const ENTRY = '0198c2f0-0000-7000-8000-0000000000aa';
 export const READING = '0198c2f0-0000-7000-8000-000000000001';
 export const OTHER_READING = '0198c2f0-0000-7000-8000-000000000002';
 
+/** An entry's content; its document places the cut and the readings, as the editor would. */
 export function content(change: Partial<EntryContent> = {}): EntryContent {
-  return { ...EMPTY_CONTENT, ...change };
+  const readings = change.readings ?? [];
+  const blocks = [{ type: 'cut' }, ...readings.map(({ id }) => ({ type: 'reading', attrs: { id } }))];
+  return { ...EMPTY_CONTENT, doc: { type: 'doc', content: blocks }, ...change };
 }
 
 export function reading(change: Partial<Reading> = {}): Reading {

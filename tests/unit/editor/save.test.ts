@@ -344,7 +344,8 @@ describe('two who changed the same entry', () => {
     type({ title: 'Mine' });
     await clock.pass(1000);
     await last().answer(problem(412));
-    await last().answer(stored(content({ title: 'Fig', readings: [added] }), 4));
+    // A helper's reading stands in no document: the server keeps it beside the prose.
+    await last().answer(stored(content({ title: 'Fig', readings: [added], doc: content().doc }), 4));
     expect(adopted).toEqual([added]);
     expect(last()).toMatchObject({
       method: 'PUT',
