@@ -6,34 +6,33 @@ import { RoleSelect } from './RoleSelect';
 /** People, their roles, and whether their accounts are open. */
 export function PeopleTable({ people }: { people: readonly Person[] }) {
   return (
-    <div className="mt-6 overflow-x-auto" role="region" aria-label="People and roles" tabIndex={0}>
-      <table>
-        <thead>
-          <tr>
-            <th scope="col">person</th>
-            <th scope="col">role</th>
-            <th scope="col">account</th>
-          </tr>
-        </thead>
-        <tbody>
-          {people.map((person) => (
-            <tr key={person.id} className="align-top">
-              <th scope="row">
-                {person.name}
-                <span className="block font-normal text-soft">{person.email}</span>
-                {person.disabled && <span className="block">disabled</span>}
-              </th>
-              <td>
+    <table className="mt-6 table-fixed">
+      <thead>
+        <tr>
+          <th scope="col" className="w-2/5">
+            person
+          </th>
+          <th scope="col">role and account</th>
+        </tr>
+      </thead>
+      <tbody>
+        {people.map((person) => (
+          <tr key={person.id}>
+            <th scope="row" className="align-top [overflow-wrap:anywhere]">
+              {person.name}
+              <span className="block font-normal text-soft">{person.email}</span>
+              {person.disabled && <span className="block text-tape">disabled</span>}
+            </th>
+            <td>
+              <div className="flex flex-wrap gap-3">
                 <RoleSelect id={person.id} name={person.name} role={person.role} roles={ROLES} />
-              </td>
-              <td>
                 <AccountSwitch person={person} />
-              </td>
-            </tr>
-          ))}
-        </tbody>
-      </table>
-    </div>
+              </div>
+            </td>
+          </tr>
+        ))}
+      </tbody>
+    </table>
   );
 }
 

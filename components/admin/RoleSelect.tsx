@@ -36,6 +36,9 @@ export function RoleSelect({ id, name, role, roles }: Props) {
           </button>
         )}
       </div>
+      <p role="status">
+        {given !== role && chosen === given ? `${name} is ${given} from their next page on.` : ''}
+      </p>
       <ErrorSummary ref={summary} errors={errors} labels={{}} />
     </div>
   );
