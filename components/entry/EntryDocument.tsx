@@ -2,6 +2,7 @@ import { Fragment, type ReactNode } from 'react';
 import { renderToReactElement } from '@tiptap/static-renderer/pm/react';
 import { CutBlock, PROSE, ReadingBlock } from '@/lib/documents/extensions';
 import { validateDocument } from '@/lib/documents/validate';
+import './prose.css';
 
 interface Props {
   readonly doc: Record<string, unknown>;
