@@ -5,7 +5,7 @@ import { severityInWords } from '@/lib/severity/severity';
 import { AskAgain } from './AskAgain';
 
 const WORD =
-  'inline-block min-h-finger max-w-full cursor-pointer border-0 border-b-2 border-ink bg-transparent px-1 font-bold';
+  'inline-block min-h-finger max-w-full cursor-pointer border-0 border-b-2 border-ink bg-transparent px-1 font-bold [field-sizing:content]';
 
 /** The question as one sentence whose words are the controls: a plain form, answered at once where scripts run. */
 export function AskSentence({ question, species }: { question: Question; species: readonly Species[] }) {
@@ -52,7 +52,7 @@ export function AskSentence({ question, species }: { question: Question; species
           max={MOST_WEEKS}
           aria-label="Weeks"
           defaultValue={question.weeks}
-          className={`${WORD} w-[2.6em] text-center`}
+          className={`${WORD} min-w-[2.2em] text-center`}
         />{' '}
         weeks?
       </p>

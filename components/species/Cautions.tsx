@@ -1,5 +1,6 @@
 import { cautionsFor } from '@/lib/species/cautions';
 import type { Species } from '@/lib/species/schema';
+import { SourceNote } from './SourceNote';
 
 /** What must be read before any figure is used. */
 export function Cautions({ species }: { species: Species }) {
@@ -9,12 +10,7 @@ export function Cautions({ species }: { species: Species }) {
         {cautionsFor(species).map(({ code, title, text, source }) => (
           <li key={title}>
             <strong>{title}</strong> {text}
-            {code !== 'general' && (
-              <span className="text-note text-soft">
-                {' '}
-                ({source === 'memory' ? 'from memory' : `source: ${source}`})
-              </span>
-            )}
+            {code !== 'general' && <SourceNote sources={source.split(', ')} />}
           </li>
         ))}
       </ul>
