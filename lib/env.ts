@@ -25,6 +25,7 @@ const Settings = z.object({
   TRUST_PROXY: z.coerce.number().int().min(0).max(10).default(0),
   AUTH_SECRET: z.string().min(32, 'must have at least 32 characters').optional(),
   DEMO: flag.optional(),
+  MEASURE: flag.default(false),
   DEMO_PASSWORD: z.string().min(12, 'must have at least 12 characters').default('after-the-cut'),
 });
 

@@ -23,6 +23,7 @@ import * as orchards from '../orchards/route';
 import * as orchard from '../orchards/[id]/route';
 import * as members from '../orchards/[id]/members/route';
 import * as tree from '../orchards/[id]/trees/[treeId]/route';
+import * as constant from '../measure/constant/route';
 import * as signUp from '../sign-up/route';
 
 /** Every route with its address; a test holds this list to the folders of app/api. */
@@ -43,6 +44,7 @@ const routes = {
   '/api/entries/{id}/revisions': revisions,
   '/api/entries/{id}/submit': submit,
   '/api/health': health,
+  '/api/measure/constant': constant,
   '/api/orchards': orchards,
   '/api/orchards/{id}': orchard,
   '/api/orchards/{id}/members': members,

@@ -7,7 +7,6 @@ import { saying } from '@/db/server/run';
 import { keptSecret, startServer, type Server } from '@/db/server/server';
 import { seedIfEmpty } from '@/lib/demo/seed';
 import { readEnv, type Env } from '@/lib/env';
-import { syncSpecies } from '@/lib/species/sync';
 import { buildIfChanged } from './build';
 import { holdDataDir } from './lock';
 import { say } from './say';
@@ -57,10 +56,7 @@ async function prepare(databaseUrl: string, settings: Env): Promise<void> {
   const db = connect(databaseUrl, { poolMax: 2, statementTimeoutSeconds: MIGRATION_SECONDS });
   try {
     await saying(say, 'Waiting for the tables to be brought up to date', migrate(db));
-    const gone = await syncSpecies(db);
-    if (gone.length > 0)
-      say(`Records may name species that the catalogue no longer holds: ${gone.join(', ')}.`);
-    await saying(say, 'Waiting for the demo to be put in', seedIfEmpty(db, settings, say));
+    await saying(say, 'Waiting for the catalogue and the demo', seedIfEmpty(db, settings, say));
   } finally {
     await db.destroy();
   }
@@ -75,6 +71,7 @@ function webEnvironment(settings: Env, databaseUrl: string): Record<string, stri
     DATA_DIR: resolve(settings.DATA_DIR),
     DATABASE_URL: databaseUrl,
     DEMO: settings.DEMO ? '1' : '0',
+    MEASURE: settings.MEASURE ? '1' : '0',
     AUTH_SECRET: secret,
     NEXTAUTH_SECRET: secret,
     NEXTAUTH_URL: settings.APP_URL,

@@ -23,6 +23,7 @@ export async function startProduct(
     NEXT_DIST_DIR: '.next-test',
     NODE_ENV: 'production',
     DEMO: '1',
+    MEASURE: '1',
   };
   for (const name of ['APP_URL', 'DATABASE_URL', 'AUTH_SECRET', 'DEMO_PASSWORD', 'TRUST_PROXY'])
     delete env[name];
