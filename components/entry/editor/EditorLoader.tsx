@@ -6,5 +6,5 @@ import type { EntryEditorProps } from './EntryEditor';
 /** Opens the editor in the browser alone: it begins with what the device still holds. */
 export const EditorLoader = dynamic<EntryEditorProps>(() => import('./EntryEditor'), {
   ssr: false,
-  loading: () => <p className="min-h-[60vh] text-soft">Opening the editor…</p>,
+  loading: () => <p className="min-h-screen text-soft">Opening the editor…</p>,
 });

@@ -9,6 +9,7 @@ import type { EntryView } from '@/lib/entries/schema';
 import type { Units } from '@/lib/units/units';
 import { EMPTY_CONTENT } from './content';
 import { deviceStorage, localCopies } from './local-copy';
+import { focusSoon } from './focus';
 import type { OrchardChoice } from './PlaceFields';
 import { editable } from './document';
 import { empty, fromView, openNew, openStored, type Session } from './session';
@@ -40,6 +41,7 @@ export default function EntryEditor({ person, entry, start, species, orchards, u
   const reopen = (next: Session) => {
     setSession(next);
     setOpened((times) => times + 1);
+    focusSoon('title');
   };
   if (!isReadable) {
     return (

@@ -6,6 +6,7 @@ import { dateInWords } from '@/lib/words/words';
 import { isDate } from './dates';
 import { useForm } from './editor-context';
 import { EMPTY_READING, type ReadingForm } from './form';
+import { focusSoon } from './focus';
 import { fieldId } from './paths';
 import type { Desk } from './desk';
 
@@ -23,8 +24,7 @@ export function Readings({ desk, editor, inDocument }: Props) {
   );
   const show = (id: string) => {
     desk.place(id);
-    // The block is drawn after this event; its first field is where to go on.
-    requestAnimationFrame(() => document.getElementById(fieldId(`readings.${id}.date`))?.focus());
+    focusSoon(`readings.${id}.date`);
   };
   const add = () => {
     const id = v7();
@@ -46,7 +46,12 @@ export function Readings({ desk, editor, inDocument }: Props) {
         {out.map(([id, reading]) => (
           <p key={id} className="mt-2 border-l-[3px] border-rule pl-3">
             {nameOf(reading)} was taken out.{' '}
-            <button type="button" className="min-h-finger px-2 underline" onClick={() => show(id)}>
+            <button
+              type="button"
+              id={fieldId(`readings.${id}.back`)}
+              className="min-h-finger px-2 underline"
+              onClick={() => show(id)}
+            >
               Put it back
             </button>
           </p>

@@ -56,51 +56,53 @@ export function SpeciesBox({ species }: { species: readonly SpeciesChoice[] }) {
   };
   const active = found[at];
   return (
-    <div className="field-cell relative">
+    <div className="field-cell">
       <label htmlFor={control.id}>Species</label>
-      <input
-        {...control}
-        type="text"
-        role="combobox"
-        autoComplete="off"
-        spellCheck={false}
-        className="field w-72"
-        aria-expanded={isOpen && found.length > 0}
-        aria-controls="species-list"
-        aria-autocomplete="list"
-        aria-activedescendant={active ? `species-${active.slug}` : undefined}
-        value={text}
-        onChange={(event) => {
-          onTyped();
-          store.set({ species: '', speciesTyped: event.target.value });
-          setOpen(true);
-          setAt(-1);
-        }}
-        onFocus={(event) => event.target.select()}
-        onClick={() => setOpen(true)}
-        onBlur={leave}
-        onKeyDown={key}
-      />
-      <ul
-        id="species-list"
-        role="listbox"
-        aria-label="Species"
-        className="choices"
-        hidden={found.length === 0}
-      >
-        {found.map((choice, index) => (
-          <li
-            key={choice.slug}
-            id={`species-${choice.slug}`}
-            role="option"
-            aria-selected={index === at}
-            onMouseDown={(event) => event.preventDefault()}
-            onClick={() => choose(choice)}
-          >
-            {choice.name} <i className="text-soft">{choice.scientific}</i>
-          </li>
-        ))}
-      </ul>
+      <div className="relative">
+        <input
+          {...control}
+          type="text"
+          role="combobox"
+          autoComplete="off"
+          spellCheck={false}
+          className="field w-72"
+          aria-expanded={isOpen && found.length > 0}
+          aria-controls="species-list"
+          aria-autocomplete="list"
+          aria-activedescendant={active ? `species-${active.slug}` : undefined}
+          value={text}
+          onChange={(event) => {
+            onTyped();
+            store.set({ species: '', speciesTyped: event.target.value });
+            setOpen(true);
+            setAt(-1);
+          }}
+          onFocus={(event) => event.target.select()}
+          onClick={() => setOpen(true)}
+          onBlur={leave}
+          onKeyDown={key}
+        />
+        <ul
+          id="species-list"
+          role="listbox"
+          aria-label="Species"
+          className="choices"
+          hidden={found.length === 0}
+        >
+          {found.map((choice, index) => (
+            <li
+              key={choice.slug}
+              id={`species-${choice.slug}`}
+              role="option"
+              aria-selected={index === at}
+              onMouseDown={(event) => event.preventDefault()}
+              onClick={() => choose(choice)}
+            >
+              {choice.name} <i className="text-soft">{choice.scientific}</i>
+            </li>
+          ))}
+        </ul>
+      </div>
       <span className="sr-only" role="status">
         {isOpen && typed !== '' && `${found.length} found`}
       </span>

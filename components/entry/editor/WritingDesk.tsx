@@ -7,6 +7,7 @@ import type { Units } from '@/lib/units/units';
 import { ConflictView } from './ConflictView';
 import { EditorContext, useForm } from './editor-context';
 import { TextField } from './fields';
+import { focusSoon } from './focus';
 import type { LocalCopies } from './local-copy';
 import { PlaceFields, type OrchardChoice } from './PlaceFields';
 import { Readings } from './Readings';
@@ -81,7 +82,10 @@ export function WritingDesk({
             mine={desk.write(session.base).content}
             theirs={theirs}
             names={{ units, nameOf }}
-            onKeepMine={() => void saver.keepMine()}
+            onKeepMine={() => {
+              void saver.keepMine();
+              focusSoon('title');
+            }}
             onTakeTheirs={() => {
               const view = saver.takeTheirs();
               if (view) onTakeTheirs(view);

@@ -9,6 +9,7 @@ import { dateInWords, weeksInWords } from '@/lib/words/words';
 import { CutFields } from './CutFields';
 import { isDate, weeksAfter } from './dates';
 import { useCut, useReading } from './editor-context';
+import { focusSoon } from './focus';
 import { ReadingFields } from './ReadingFields';
 
 /** The fields handle their own events: the prose hears nothing of what happens in a block. */
@@ -62,12 +63,16 @@ function ReadingView(props: ReactNodeViewProps) {
   const id = String(props.node.attrs.id);
   const { date } = useReading(id);
   const weeks = weeksAfter(useCut().date, date);
+  const takeOut = () => {
+    props.deleteNode();
+    focusSoon(`readings.${id}.back`, 'readings');
+  };
   const parts = ['Reading', isDate(date) ? dateInWords(date) : 'no date yet'];
   if (weeks !== null) parts.push(weeksInWords(weeks));
   return (
     <Block {...props} heading={parts.join(', ')}>
       <ReadingFields id={id} />
-      <button type="button" className="mt-2 min-h-finger underline" onClick={() => props.deleteNode()}>
+      <button type="button" className="mt-2 min-h-finger underline" onClick={takeOut}>
         Take this reading out
       </button>
     </Block>

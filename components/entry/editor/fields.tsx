@@ -22,8 +22,8 @@ export function useFieldState(path: string, hasHint: boolean) {
     [hasHint && `${id}-hint`, message && `${id}-error`].filter(Boolean).join(' ') || undefined;
   return {
     message,
-    /** Call as something is typed: a message that stands already stays until it is true no more. */
-    typed: () => setTyping(message === null),
+    /** Call as something is typed: what is half typed is not complained of, unless it already was. */
+    typed: () => setTyping(!(found?.isProvisional && message !== null)),
     control: {
       id,
       'aria-invalid': message ? true : undefined,
