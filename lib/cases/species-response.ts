@@ -1,6 +1,7 @@
 import type { Db } from '@/lib/database';
 import { Kept } from '@/lib/lists/kept';
 import { seen, type SeenEntry } from '@/lib/seen/seen';
+import { dataVersion, speciesSubject } from '@/lib/versions/versions';
 import type { SpeciesResponse } from './schema';
 import { seenEntries } from './seen-entries';
 
@@ -10,7 +11,7 @@ const responsesKept = new Kept<SpeciesResponse>(500);
 
 /** Every case of a species: what was seen at so many weeks, and what is expected once there is a model. */
 export async function speciesResponse(db: Db, species: string, weeks: number): Promise<SpeciesResponse> {
-  const version = await dataVersion(db, `species:${species}`);
+  const version = await dataVersion(db, [speciesSubject(species)]);
   const key = `${species} ${version} ${weeks}`;
   const kept = responsesKept.get(key);
   if (kept) return kept;
@@ -23,13 +24,7 @@ export async function speciesResponse(db: Db, species: string, weeks: number): P
   });
 }
 
-async function entriesOf(db: Db, species: string, version: number): Promise<SeenEntry[]> {
+async function entriesOf(db: Db, species: string, version: string): Promise<SeenEntry[]> {
   const key = `${species} ${version}`;
   return entriesKept.get(key) ?? entriesKept.set(key, await seenEntries(db, species));
-}
-
-/** Counts up with each change to what everyone sees of a subject; 0 before the first. */
-async function dataVersion(db: Db, subject: string): Promise<number> {
-  const row = await db('data_versions').where({ subject }).first<{ version: number | string }>('version');
-  return Number(row?.version ?? 0);
 }

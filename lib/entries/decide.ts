@@ -4,8 +4,9 @@ import { Conflict, Invalid, Stale } from '@/lib/errors/errors';
 import type { Actor } from '@/lib/people/actor';
 import { loadRevision } from './load';
 import { dropRevision, type Revision } from './revisions';
+import { raiseAccepted } from './raise-accepted';
 import { Uuid } from './schema';
-import { bumpDataVersions, updateEntry, type EntryRow } from './table';
+import { updateEntry, type EntryRow } from './table';
 
 export const Decision = z.strictObject({
   decision: z.enum(['accept', 'return'], 'must be accept or return'),
@@ -75,5 +76,5 @@ async function accept(
     waitingSince: null,
     returnedNote: null,
   });
-  await bumpDataVersions(db, [waiting.content.species, before?.content.species ?? null]);
+  await raiseAccepted(db, [waiting.content.species, before?.content.species ?? null]);
 }

@@ -81,18 +81,3 @@ export async function helperIds(db: Db, orchardId: string | null): Promise<strin
     .select<{ id: string }[]>('person_id as id');
   return rows.map(({ id }) => id);
 }
-
-/** Takes note that what everyone sees of these species has changed, so that kept figures are made anew. */
-export async function bumpDataVersions(db: Db, species: readonly (string | null)[]): Promise<void> {
-  const subjects = [
-    'accepted',
-    ...new Set(species.filter((slug) => slug !== null).map((slug) => `species:${slug}`)),
-  ];
-  // One order everywhere, so that two accepts never lock each other out.
-  for (const subject of subjects.sort()) {
-    await db.raw(
-      'INSERT INTO data_versions (subject, version) VALUES (?, 1) ON DUPLICATE KEY UPDATE version = version + 1',
-      [subject],
-    );
-  }
-}

@@ -2,8 +2,9 @@ import type { Db } from '@/lib/database';
 import { Conflict } from '@/lib/errors/errors';
 import { requireRevisionToRemove } from '@/lib/http/condition';
 import { loadRevision } from './load';
+import { raiseAccepted } from './raise-accepted';
 import { dropRevision } from './revisions';
-import { bumpDataVersions, updateEntry, type EntryRow } from './table';
+import { updateEntry, type EntryRow } from './table';
 
 /**
  * Deletes a draft that nobody else has read; anything further along is withdrawn and kept.
@@ -25,7 +26,7 @@ export async function removeEntry(
     return 'deleted';
   }
   if (row.status === 'accepted')
-    await bumpDataVersions(db, [(await loadRevision(db, row.acceptedId)).content.species]);
+    await raiseAccepted(db, [(await loadRevision(db, row.acceptedId)).content.species]);
   await updateEntry(db, row.id, { status: 'withdrawn', waitingId: null, waitingSince: null });
   if (row.waitingId !== null && row.waitingId !== row.workingId) await dropRevision(db, row.waitingId);
   return 'withdrawn';

@@ -2,6 +2,7 @@ import { z } from 'zod';
 import type { Db } from '@/lib/database';
 import { NotFound } from '@/lib/errors/errors';
 import { requireRevision } from '@/lib/http/condition';
+import { NAMES, raiseVersions } from '@/lib/versions/versions';
 import { ROLES, type Actor } from './actor';
 import { PersonName } from './schema';
 
@@ -52,5 +53,7 @@ export async function saveAccount(
   await db('people')
     .where({ id: account.id })
     .update({ ...body, revision });
+  // Names stand on pages that are kept in memory.
+  if (account.name !== body.name) await raiseVersions(db, [NAMES]);
   return { ...account, ...body, revision };
 }
