@@ -100,7 +100,7 @@ export function CutFields() {
       </div>
       {isDate(cut.date) && (
         <p className="mt-2 text-note text-soft">
-          Count all {cut.branches === '1' ? '' : 'marked branches '}again about{' '}
+          {cut.branches === '1' ? 'Count it' : 'Count every marked branch'} again about{' '}
           {dateInWords(returnDate(cut.date))}, 8 weeks after.
         </p>
       )}
