@@ -15,7 +15,7 @@ export function CasesTable({ species, weeks, cases, caption }: Props) {
       <thead>
         <tr>
           <th scope="col">cut</th>
-          <th scope="col" className="hidden sm:table-cell">
+          <th scope="col">
             <span className="sr-only">drawn</span>
           </th>
           <th scope="col" className="number">
@@ -30,7 +30,7 @@ export function CasesTable({ species, weeks, cases, caption }: Props) {
           <th scope="col" className="number hidden sm:table-cell">
             bare
           </th>
-          <th scope="col" className="number">
+          <th scope="col" className="number hidden sm:table-cell">
             branches
           </th>
           <th scope="col" className="number">
@@ -66,14 +66,14 @@ function CaseRow({
           {name}
         </a>
       </th>
-      <td className="hidden w-40 sm:table-cell">
+      <td className="w-20 sm:w-40">
         <TwigMark
           size="small"
           severity={severity}
           tip={tip}
           middle={seen.rate}
           high={seen.rate !== null && seen.sd !== null ? seen.rate + seen.sd : null}
-          className="w-36"
+          className="w-16 sm:w-36"
         />
       </td>
       {seen.rate === null ? (
@@ -90,7 +90,7 @@ function CaseRow({
           <td className="number hidden sm:table-cell">
             {seen.none === null ? '–' : shareInWords(seen.none)}
           </td>
-          <td className="number">{seen.branches.toLocaleString('en-GB')}</td>
+          <td className="number hidden sm:table-cell">{seen.branches.toLocaleString('en-GB')}</td>
           <td className="number">{seen.entries.toLocaleString('en-GB')}</td>
         </>
       )}

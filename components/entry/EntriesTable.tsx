@@ -7,18 +7,23 @@ import { countedMean } from './counted';
 export function EntriesTable({
   entries,
   withStatus = false,
+  withSpecies = true,
 }: {
   entries: readonly EntryView[];
   withStatus?: boolean;
+  /** Off where all are of one species. */
+  withSpecies?: boolean;
 }) {
   return (
     <table className="mt-6">
       <thead>
         <tr>
           <th scope="col">entry</th>
-          <th scope="col" className="hidden sm:table-cell">
-            species
-          </th>
+          {withSpecies && (
+            <th scope="col" className="hidden sm:table-cell">
+              species
+            </th>
+          )}
           <th scope="col">cut</th>
           <th scope="col" className="number hidden sm:table-cell">
             shoots a branch, last counted
@@ -28,14 +33,16 @@ export function EntriesTable({
       </thead>
       <tbody>
         {entries.map((entry) => (
-          <Row key={entry.id} entry={entry} withStatus={withStatus} />
+          <Row key={entry.id} entry={entry} withStatus={withStatus} withSpecies={withSpecies} />
         ))}
       </tbody>
     </table>
   );
 }
 
-function Row({ entry, withStatus }: { entry: EntryView; withStatus: boolean }) {
+type RowProps = { entry: EntryView; withStatus: boolean; withSpecies: boolean };
+
+function Row({ entry, withStatus, withSpecies }: RowProps) {
   const species = entry.species ? speciesBySlug(entry.species) : undefined;
   const last = entry.readings.findLast((reading) => countedMean(reading) !== null);
   const mean = last ? countedMean(last) : null;
@@ -46,7 +53,7 @@ function Row({ entry, withStatus }: { entry: EntryView; withStatus: boolean }) {
           {entry.title ?? 'Untitled'}
         </a>
       </th>
-      <td className="hidden sm:table-cell">{species ? commonName(species) : '–'}</td>
+      {withSpecies && <td className="hidden sm:table-cell">{species ? commonName(species) : '–'}</td>}
       <td>
         {entry.class
           ? `${entry.class}${entry.cut.tip && entry.class !== 'uncut' ? `, tip ${entry.cut.tip}` : ''}`

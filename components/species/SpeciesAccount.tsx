@@ -57,7 +57,7 @@ export function SpeciesAccount({ species, response: { weeks, cases, otherCuts },
       <section id="entries" className="mt-12">
         <h2>Entries</h2>
         {entries.length > 0 ? (
-          <EntriesTable entries={entries} />
+          <EntriesTable entries={entries} withSpecies={false} />
         ) : (
           <p className="mt-2">No accepted entry of {name} yet.</p>
         )}
