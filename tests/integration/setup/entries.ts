@@ -13,7 +13,8 @@ import { call, read } from './request';
 export type Someone = { id: string } | null;
 type Json = Record<string, unknown>;
 
-const matching = (revision?: number) => (revision === undefined ? {} : { 'if-match': `"${revision}"` });
+const matching = (revision?: number): Record<string, string> =>
+  revision === undefined ? {} : { 'if-match': `"${revision}"` };
 
 /** The routes of entries as somebody's program would use them. */
 export const entries = {
