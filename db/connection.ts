@@ -14,12 +14,17 @@ const AS_TEXT: object = { dateStrings: ['DATE'], jsonStrings: true };
  * A pool on MariaDB. Dates stay the text they are, decimals become numbers, times are UTC. READ COMMITTED, because every
  * change locks the one row it is about and gap locks would only make strangers wait for each other.
  */
-export function connect(
+export function connect(url: string, options: ConnectOptions = {}): Knex {
+  return knexFactory(connectionConfig(url, options));
+}
+
+/** What `connect` hands to knex; knex's own command line is given the same. */
+export function connectionConfig(
   url: string,
   { poolMax = 5, statementTimeoutSeconds = 10 }: ConnectOptions = {},
-): Knex {
+): Knex.Config {
   const { hostname, port, username, password, pathname } = new URL(url);
-  return knexFactory({
+  return {
     client: 'mysql2',
     connection: {
       // Knex's own type lacks what mysql2 takes here: a list of types, and JSON as the text it is.
@@ -47,5 +52,5 @@ export function connect(
         );
       },
     },
-  });
+  };
 }

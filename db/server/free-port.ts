@@ -14,11 +14,13 @@ export function freePort(): Promise<number> {
   });
 }
 
-/** Whether somebody listens on this port of loopback. */
-export function isTaken(port: number): Promise<boolean> {
+/** Why this process cannot listen on a port of loopback, or null when it can. */
+export function portTrouble(port: number): Promise<'taken' | 'not allowed' | null> {
   return new Promise((done) => {
     const probe = createServer();
-    probe.once('error', () => done(true));
-    probe.listen(port, '127.0.0.1', () => probe.close(() => done(false)));
+    probe.once('error', (error: NodeJS.ErrnoException) =>
+      done(error.code === 'EACCES' ? 'not allowed' : 'taken'),
+    );
+    probe.listen(port, '127.0.0.1', () => probe.close(() => done(null)));
   });
 }

@@ -1,31 +1,37 @@
-import { existsSync, readFileSync, rmSync } from 'node:fs';
-import { join } from 'node:path';
+import { existsSync, readdirSync, readFileSync, rmSync } from 'node:fs';
+import { basename, join } from 'node:path';
+import { setTimeout as wait } from 'node:timers/promises';
 import { saying } from './run';
 
 const WAIT_MS = 60_000;
 const LOOK_MS = 100;
 
 /**
- * Ends the server that a killed start left running on this very data folder, so that its files are free; clears a pid
- * file whose process is gone or is something else.
+ * Ends a server that a killed start left running on this very data folder, so that its files are free, and clears its
+ * pid file. What runs is asked, not the pid file: a server that still repairs itself has written none, and an old one's
+ * pid may be somebody else's by now.
  */
 export async function endLeftover(files: string, log: (line: string) => void): Promise<void> {
-  const pidFile = join(files, 'server.pid');
-  if (!existsSync(pidFile)) return;
-  const pid = Number(readFileSync(pidFile, 'utf8').trim());
-  if (isServerOf(pid, files)) {
+  for (const pid of serversOf(files)) {
     log('A database server of an earlier start is still running; it is stopped first.');
     process.kill(pid, 'SIGTERM');
     await saying(log, 'Waiting for the earlier database server to stop', gone(pid, files));
   }
-  rmSync(pidFile, { force: true });
+  rmSync(join(files, 'server.pid'), { force: true });
+}
+
+function serversOf(files: string): number[] {
+  if (!existsSync('/proc/self')) return [];
+  return readdirSync('/proc')
+    .filter((name) => /^\d+$/.test(name))
+    .map(Number)
+    .filter((pid) => isServerOf(pid, files));
 }
 
 function isServerOf(pid: number, files: string): boolean {
-  if (!Number.isInteger(pid) || pid < 2) return false;
   try {
-    const words = readFileSync(`/proc/${pid}/cmdline`, 'utf8').split('\0');
-    return words.includes(`--datadir=${files}`);
+    const [program = '', ...args] = readFileSync(`/proc/${pid}/cmdline`, 'utf8').split('\0');
+    return basename(program) === 'mariadbd' && args.includes(`--datadir=${files}`);
   } catch {
     return false;
   }
@@ -36,6 +42,6 @@ async function gone(pid: number, files: string): Promise<void> {
   while (isServerOf(pid, files)) {
     if (Date.now() > deadline)
       throw new Error(`The database server of an earlier start (process ${pid}) does not stop.`);
-    await new Promise((done) => setTimeout(done, LOOK_MS));
+    await wait(LOOK_MS);
   }
 }

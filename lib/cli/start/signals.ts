@@ -3,21 +3,25 @@ const LOOK_MS = 250;
 export type Told = {
   /** Resolves with why, once it is time to stop. */
   promise: Promise<string>;
+  /** Aborted at that moment. */
+  signal: AbortSignal;
   now: () => boolean;
+  /** Begins the work, unless told to stop already, and gives its result; rejects at once when told to. */
+  orStop: <T>(work: () => Promise<T>) => Promise<T>;
   done: () => void;
 };
 
 /**
- * Ctrl-C, SIGTERM, SIGHUP, or the death of whoever started this: npm does not pass signals on, so a killed npm shows
- * only as a new parent.
+ * Ctrl-C, SIGTERM, SIGHUP, or the death of whoever started this: npm does not always pass signals on, and a killed npm
+ * shows only as a new parent.
  */
 export function untilToldToStop(): Told {
   const parent = process.ppid;
-  let told = false;
+  const control = new AbortController();
   let tell: (why: string) => void = () => undefined;
   const promise = new Promise<string>((resolve) => {
     tell = (why) => {
-      told = true;
+      control.abort();
       resolve(why);
     };
   });
@@ -26,5 +30,13 @@ export function untilToldToStop(): Told {
   const watch = setInterval(() => {
     if (process.ppid !== parent) tell('the parent process is gone');
   }, LOOK_MS);
-  return { promise, now: () => told, done: () => clearInterval(watch) };
+  const stopped = promise.then((why) => Promise.reject(new Error(`told to stop: ${why}`)));
+  stopped.catch(() => undefined);
+  return {
+    promise,
+    signal: control.signal,
+    now: () => control.signal.aborted,
+    orStop: (work) => (control.signal.aborted ? stopped : Promise.race([work(), stopped])),
+    done: () => clearInterval(watch),
+  };
 }

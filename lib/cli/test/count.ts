@@ -6,19 +6,22 @@ export type Count = { passed: number; failed: number };
 const VitestReport = z.object({
   numPassedTests: z.number(),
   numFailedTests: z.number(),
-  numFailedTestSuites: z.number(),
-  success: z.boolean(),
+  testResults: z.array(z.object({ status: z.string(), assertionResults: z.array(z.unknown()) })),
 });
 const PlaywrightReport = z.object({
   stats: z.object({ expected: z.number(), unexpected: z.number(), flaky: z.number() }),
   errors: z.array(z.unknown()),
 });
 
-/** A run that ended badly without a failed test (a file that does not load, no test at all) counts as one failure. */
+/** A file that does not load is one failure, and so is a run that ended badly in another way, or without a test. */
 export function vitestCount(path: string, code: number | null): Count {
   const report = existsSync(path) ? VitestReport.safeParse(JSON.parse(readFileSync(path, 'utf8'))) : null;
   if (!report?.success) return { passed: 0, failed: 1 };
-  const { numPassedTests: passed, numFailedTests: failed } = report.data;
+  const { numPassedTests: passed, numFailedTests, testResults } = report.data;
+  const unloaded = testResults.filter(
+    ({ status, assertionResults }) => status === 'failed' && assertionResults.length === 0,
+  );
+  const failed = numFailedTests + unloaded.length;
   return { passed, failed: failed > 0 || (code === 0 && passed > 0) ? failed : 1 };
 }
 

@@ -1,8 +1,11 @@
 import { spawn } from 'node:child_process';
+import { setTimeout as wait } from 'node:timers/promises';
 import { freePort } from '@/db/server/free-port';
 import type { Told } from '../start/signals';
+import { plainEnvironment } from './processes';
 
 const READY_MS = 400_000;
+const LOOK_MS = 200;
 
 export type Product = { url: string; dataDir: string; stop: () => Promise<void> };
 
@@ -16,35 +19,32 @@ export async function startProduct(
   told: Told,
 ): Promise<Product> {
   const port = await freePort();
-  const env: NodeJS.ProcessEnv = {
-    ...process.env,
-    PORT: String(port),
-    DATA_DIR: dataDir,
-    NEXT_DIST_DIR: '.next-test',
-    NODE_ENV: 'production',
-    DEMO: '1',
-    MEASURE: '1',
-  };
-  for (const name of ['APP_URL', 'DATABASE_URL', 'AUTH_SECRET', 'DEMO_PASSWORD', 'TRUST_PROXY'])
-    delete env[name];
   const child = spawn(process.execPath, [...nodeArgs, 'lib/cli/start.ts'], {
     stdio: ['ignore', 'inherit', 'inherit'],
-    env,
+    env: plainEnvironment({
+      PORT: String(port),
+      DATA_DIR: dataDir,
+      NEXT_DIST_DIR: '.next-test',
+      DEMO: '1',
+      MEASURE: '1',
+    }),
   });
   const ended = new Promise<number | null>((done) => child.once('exit', (code) => done(code)));
-  void told.promise.then(() => child.kill('SIGTERM'));
+  const end = () => child.kill('SIGTERM');
+  told.signal.addEventListener('abort', end, { once: true });
+  let isOver = false;
+  void ended.then(() => (isOver = true));
   const stop = async () => {
-    child.kill('SIGTERM');
+    told.signal.removeEventListener('abort', end);
+    if (!isOver) end();
     await ended;
   };
   const url = `http://127.0.0.1:${port}`;
-  let over = false;
-  void ended.then(() => (over = true));
   const deadline = Date.now() + READY_MS;
-  while (!over && Date.now() < deadline) {
+  while (!isOver && Date.now() < deadline) {
     const answer = await fetch(`${url}/api/health`).catch(() => null);
     if (answer?.ok) return { url, dataDir, stop };
-    await new Promise((done) => setTimeout(done, 200));
+    await wait(LOOK_MS);
   }
   await stop();
   throw new Error('The product did not start; what it said stands above.');

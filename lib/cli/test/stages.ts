@@ -1,7 +1,7 @@
 import { mkdtempSync, rmSync } from 'node:fs';
 import { tmpdir } from 'node:os';
 import { join } from 'node:path';
-import { findProgram, installPackages } from '@/db/server/install';
+import { installPackages, isInstalled } from '@/db/server/install';
 import { startServer } from '@/db/server/server';
 import { untilToldToStop, type Told } from '../start/signals';
 import { playwrightCount, vitestCount, type Count } from './count';
@@ -12,6 +12,21 @@ const TSX = ['--import', 'tsx'];
 const BIN = 'node_modules/.bin';
 const STAGES = ['typecheck', 'lint', 'unit', 'reference', 'integration', 'browser'] as const;
 type Stage = (typeof STAGES)[number];
+
+// Apart from .next, which a start may be building just now.
+const TYPE_CHECK = [
+  ['next', 'typegen'],
+  ['tsc', '--noEmit', '--project', 'tsconfig.check.json'],
+];
+const LINT = [
+  ['eslint', '.', '--max-warnings=0'],
+  [
+    'depcruise',
+    '--config',
+    '.dependency-cruiser.cjs',
+    ...['app', 'components', 'lib', 'db', 'tests', 'proxy.ts'],
+  ],
+];
 
 /** Runs all stages, or those named, each to its end; closes with one line that counts what passed and failed. */
 export async function runStages(named: readonly string[]): Promise<void> {
@@ -42,22 +57,8 @@ export async function runStages(named: readonly string[]): Promise<void> {
 
 async function run(stage: Stage, scratch: string, told: Told): Promise<Count> {
   try {
-    if (stage === 'typecheck')
-      return one(
-        await commands(told, [
-          ['next', 'typegen'],
-          ['tsc', '--noEmit'],
-        ]),
-      );
-    if (stage === 'lint') {
-      const places = ['app', 'components', 'lib', 'db', 'tests', 'proxy.ts'];
-      return one(
-        await commands(told, [
-          ['eslint', '.', '--max-warnings=0'],
-          ['depcruise', '--config', '.dependency-cruiser.cjs', ...places],
-        ]),
-      );
-    }
+    if (stage === 'typecheck') return one(await commands(told, TYPE_CHECK, { NEXT_DIST_DIR: '.next-test' }));
+    if (stage === 'lint') return one(await commands(told, LINT, {}));
     if (stage === 'integration') return await integration(scratch, told);
     if (stage === 'browser') return await browser(scratch, told);
     return await vitest(stage, scratch, told, {});
@@ -69,10 +70,14 @@ async function run(stage: Stage, scratch: string, told: Told): Promise<Count> {
 
 const one = (passed: boolean): Count => (passed ? { passed: 1, failed: 0 } : { passed: 0, failed: 1 });
 
-async function commands(told: Told, list: readonly string[][]): Promise<boolean> {
+async function commands(
+  told: Told,
+  list: readonly string[][],
+  env: Record<string, string>,
+): Promise<boolean> {
   let passed = true;
   for (const [program = '', ...args] of list) {
-    passed = (await runShown(join(BIN, program), args, {}, told)) === 0 && passed;
+    passed = (await runShown(join(BIN, program), args, env, told)) === 0 && passed;
   }
   return passed;
 }
@@ -106,7 +111,7 @@ async function integration(scratch: string, told: Told): Promise<Count> {
 }
 
 async function browser(scratch: string, told: Told): Promise<Count> {
-  if (!findProgram('chromium')) await installPackages(['chromium'], 'The browser', console.log);
+  if (!isInstalled('chromium', 'chromium')) await installPackages(['chromium'], 'The browser', console.log);
   const product = await startProduct(join(scratch, 'product'), TSX, told);
   const report = join(scratch, 'browser.json');
   try {
