@@ -39,7 +39,7 @@ export function FindSpecies({ q, wood, oldWood }: { q: string; wood: string; old
       className="mt-4 flex flex-wrap items-end gap-4"
     >
       <label className="grow">
-        <span className="block text-note text-soft">Name, in any of its languages</span>
+        <span className="block text-note text-soft">Name: scientific, English, Spanish or French</span>
         <input
           name="q"
           type="search"
@@ -54,7 +54,7 @@ export function FindSpecies({ q, wood, oldWood }: { q: string; wood: string; old
         <select name="wood" defaultValue={wood} className="field">
           <option value="">any</option>
           <option value="soft">soft, below 0.45</option>
-          <option value="medium">medium</option>
+          <option value="medium">medium, 0.45 to 0.56</option>
           <option value="hard">hard, from 0.56 g/cm³</option>
           <option value="unknown">not known</option>
         </select>

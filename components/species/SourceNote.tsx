@@ -1,6 +1,4 @@
-import { sourceWords } from '@/lib/species/sources';
-
 /** Where a fact comes from, small beside it. */
-export function SourceNote({ sources }: { sources: readonly string[] }) {
-  return <span className="text-note text-soft"> ({sources.map(sourceWords).join('; ')})</span>;
+export function SourceNote({ said }: { said: readonly string[] }) {
+  return <span className="text-note text-soft"> ({said.join('; ')})</span>;
 }

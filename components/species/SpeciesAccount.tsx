@@ -4,16 +4,17 @@ import { OtherCuts } from '@/components/cases/OtherCuts';
 import { EntriesTable } from '@/components/entry/EntriesTable';
 import { MOST_WEEKS, type SpeciesResponse } from '@/lib/cases/schema';
 import type { EntryView } from '@/lib/entries/schema';
-import { commonName } from '@/lib/species/catalogue';
+import { nameInSentence } from '@/lib/species/catalogue';
 import type { Species } from '@/lib/species/schema';
 import { Cautions } from './Cautions';
+import { Sources } from './Sources';
 import { SpeciesHead } from './SpeciesHead';
 
 type Props = { species: Species; response: SpeciesResponse; entries: readonly EntryView[] };
 
 /** All that is known of one species: what it is, what to mind, what was seen, and the entries themselves. */
 export function SpeciesAccount({ species, response: { weeks, cases, otherCuts }, entries }: Props) {
-  const name = commonName(species).toLowerCase();
+  const name = nameInSentence(species);
   const recorded = cases.some((one) => one.seen.entries > 0);
   return (
     <>
@@ -62,6 +63,7 @@ export function SpeciesAccount({ species, response: { weeks, cases, otherCuts },
           <p className="mt-2">No accepted entry of {name} yet.</p>
         )}
       </section>
+      <Sources species={species} />
     </>
   );
 }

@@ -1,6 +1,9 @@
 import { commonName } from '@/lib/species/catalogue';
-import { sproutingSentence } from '@/lib/species/cautions';
 import type { Species } from '@/lib/species/schema';
+import { sourceWords } from '@/lib/species/sources';
+import { sproutingSentence, sproutingSources } from '@/lib/species/sprouting';
+import { densityInWords, WOOD_WORDS } from '@/lib/species/wood';
+import { plural } from '@/lib/words/words';
 import { SourceNote } from './SourceNote';
 
 const LANGUAGES: Record<string, string> = {
@@ -20,7 +23,7 @@ const LANGUAGES: Record<string, string> = {
 
 /** What is known of a species without any record: its names, its wood, how it answers a hard cut. */
 export function SpeciesHead({ species }: { species: Species }) {
-  const { woodDensity, resprouts, season, synonyms } = species;
+  const { woodDensity, wood, season, synonyms } = species;
   return (
     <>
       <h1>{commonName(species)}</h1>
@@ -32,17 +35,19 @@ export function SpeciesHead({ species }: { species: Species }) {
           <dt className="inline font-bold">Sprouting. </dt>
           <dd className="inline">
             {sproutingSentence(species)}
-            <SourceNote sources={resprouts.sources} />
+            <SourceNote said={sproutingSources(species)} />
           </dd>
         </div>
         <div>
           <dt className="inline font-bold">Wood. </dt>
           <dd className="inline">
-            {woodDensity ? (
+            {woodDensity && wood ? (
               <>
-                {species.wood}-wooded: {woodDensity.value.toFixed(2)} g/cm³, the mean of {woodDensity.records}{' '}
-                {woodDensity.level === 'species' ? 'records of the species' : 'of its relatives'}
-                <SourceNote sources={[woodDensity.source]} />
+                {WOOD_WORDS[wood]}: {densityInWords(woodDensity.value)}, the mean of{' '}
+                {woodDensity.level === 'species'
+                  ? plural(woodDensity.records, 'record')
+                  : `${plural(woodDensity.records, 'relative')} in its genus, for want of its own`}
+                <SourceNote said={[sourceWords(woodDensity.source)]} />
               </>
             ) : (
               'density not known'
@@ -54,7 +59,7 @@ export function SpeciesHead({ species }: { species: Species }) {
             <dt className="inline font-bold">When. </dt>
             <dd className="inline">
               {season.note}
-              <SourceNote sources={season.sources} />
+              <SourceNote said={season.sources.map(sourceWords)} />
             </dd>
           </div>
         )}

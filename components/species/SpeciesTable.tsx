@@ -1,5 +1,6 @@
 import { commonName } from '@/lib/species/catalogue';
 import type { Species } from '@/lib/species/schema';
+import { densityInWords } from '@/lib/species/wood';
 import { plural } from '@/lib/words/words';
 
 /** The catalogue as a table. */
@@ -7,7 +8,8 @@ export function SpeciesTable({ species }: { species: readonly Species[] }) {
   return (
     <table className="mt-6">
       <caption className="pb-2 text-left text-note text-soft">
-        {plural(species.length, 'species', 'species')}
+        {plural(species.length, 'species', 'species')}. Sprouting is mostly from memory; each species’ own
+        page names the source of every fact.
       </caption>
       <thead>
         <tr>
@@ -35,7 +37,7 @@ export function SpeciesTable({ species }: { species: readonly Species[] }) {
             <td>
               {one.wood ?? 'not known'}
               {one.woodDensity && (
-                <span className="block text-note text-soft">{one.woodDensity.value.toFixed(2)} g/cm³</span>
+                <span className="block text-note text-soft">{densityInWords(one.woodDensity.value)}</span>
               )}
             </td>
             <td className="hidden sm:table-cell">

@@ -1,42 +1,41 @@
-import { readFileSync } from 'node:fs';
-import { join } from 'node:path';
-import { parse } from 'yaml';
 import { z } from 'zod';
+import { readContent } from './read-yaml';
 import { CAUTION_CODES, type Species } from './schema';
 
-const Words = z.strictObject({ title: z.string().min(1), text: z.string().min(1) });
+const text = z.string('must be text').min(1, 'must not be empty');
+const Words = z.strictObject({ title: text, text });
 const CautionsFile = z.strictObject({
   codes: z.record(z.enum(CAUTION_CODES), Words),
-  general: z.array(Words.extend({ source: z.string() })),
+  general: z.array(z.strictObject({ code: text, title: text, text, source: text }), 'must be a list'),
 });
 
 export type Caution = { code: string; title: string; text: string; source: string };
 
 let file: z.output<typeof CautionsFile> | undefined;
-function words() {
-  return (file ??= CautionsFile.parse(
-    parse(readFileSync(join(process.cwd(), 'content', 'cautions.yaml'), 'utf8')),
-  ));
-}
+const words = () => (file ??= readContent('content/cautions.yaml', CautionsFile));
 
-/** What must be said before any figure: that it may not sprout, then what is particular to the plant, then what holds for all. */
-export function cautionsFor(species: Species): Caution[] {
-  const { codes, general } = words();
+/** What is particular to a species: first that it may not sprout, then the cautions of its file. */
+export function ownCautions(species: Species): Caution[] {
   const sprouting = fromOldWoodCaution(species);
   return [
     ...(sprouting ? [sprouting] : []),
-    ...species.cautions.map(({ code, source }) => ({ code, ...codes[code], source })),
-    ...general.map((one) => ({ code: 'general', ...one })),
+    ...species.cautions.map(({ code, source }) => ({ code, ...words().codes[code], source })),
   ];
 }
 
+/** What holds for every cut. */
+export const generalCautions = (): readonly Caution[] => words().general;
+
+/** All that must be said before any figure, in the order in which to say it. */
+export const cautionsFor = (species: Species): Caution[] => [...ownCautions(species), ...generalCautions()];
+
 function fromOldWoodCaution({ resprouts, plant }: Species): Caution | null {
-  const source = resprouts.sources.join(', ');
+  const source = resprouts.oldWoodSources.join(', ');
   if (plant === 'palm') {
     return {
       code: 'no-resprout',
-      title: 'A palm does not grow back.',
-      text: 'Cut below its one growing point, the stem is dead; take off dry leaves alone.',
+      title: 'A cut palm stem does not grow back.',
+      text: 'It has one growing point, and cut below that it is dead. On a stem you want to keep, take off dry leaves alone.',
       source,
     };
   }
@@ -57,22 +56,4 @@ function fromOldWoodCaution({ resprouts, plant }: Species): Caution | null {
     };
   }
   return null;
-}
-
-/** How it answers a hard cut, in one sentence. */
-export function sproutingSentence({ resprouts, plant }: Species): string {
-  if (plant === 'palm') return 'It does not resprout: a palm has one growing point.';
-  const degree = {
-    freely: 'It resprouts freely after a hard cut',
-    moderately: 'It resprouts moderately after a hard cut',
-    weakly: 'It resprouts weakly after a hard cut',
-    no: 'It does not resprout after a hard cut',
-  }[resprouts.degree];
-  if (resprouts.degree === 'no') return `${degree}.`;
-  const oldWood = {
-    yes: 'old wood too',
-    weak: 'old wood only weakly',
-    no: 'green wood alone, not from old bare wood',
-  };
-  return `${degree}, from ${oldWood[resprouts.fromOldWood]}.`;
 }

@@ -9,6 +9,9 @@ export type Narrowed = {
 /** Names that are read: scientific, English, Spanish, French and synonyms, but for those that must not be matched. */
 const LANGUAGES = ['en', 'es', 'fr'] as const;
 
+/** Names in use for another species too: shown, and not matched. */
+const NOT_MATCHED = /\((misapplied|in part)\)$/;
+
 type Named = { species: Species; names: string[] };
 let index: Named[] | undefined;
 
@@ -43,7 +46,7 @@ function named(): Named[] {
     names: [
       species.scientific,
       ...LANGUAGES.flatMap((language) => species.names[language] ?? []),
-      ...species.synonyms.filter((name) => !name.includes('(')),
+      ...species.synonyms.filter((name) => !NOT_MATCHED.test(name)),
     ].map(plain),
   })));
 }

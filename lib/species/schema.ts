@@ -57,7 +57,9 @@ export const SpeciesFile = z.strictObject({
   resprouts: z.strictObject({
     degree: oneOf(['freely', 'moderately', 'weakly', 'no']),
     fromOldWood: oneOf(['yes', 'weak', 'no']),
+    /** Behind the degree. */
     sources,
+    oldWoodSources: sources,
   }),
   cautions: z.array(z.strictObject({ code: oneOf(CAUTION_CODES), source: words }), 'must be a list'),
   season: z.strictObject({ note: words.max(120, 'must have at most 120 characters'), sources }).nullable(),

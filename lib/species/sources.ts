@@ -1,18 +1,40 @@
-import { readFileSync } from 'node:fs';
-import { join } from 'node:path';
-import { parse } from 'yaml';
 import { z } from 'zod';
+import { readContent } from './read-yaml';
+import type { Species } from './schema';
 
-const Sources = z.record(
-  z.string(),
-  z.object({ citation: z.string(), licence: z.string(), read: z.string() }),
-);
+const Source = z.strictObject({
+  /** As pages name it beside a fact. */
+  short: z.string('must be text').min(1, 'must not be empty'),
+  /** All that it says of sprouting, where that is less than how freely. */
+  sproutingAlone: z.string('must be text').min(1, 'must not be empty').optional(),
+  citation: z.string('must be text').min(1, 'must not be empty'),
+  licence: z.string('must be text'),
+  /** How much of it was read. */
+  read: z.string('must be text'),
+});
+export type Source = z.output<typeof Source>;
 
-let kept: z.output<typeof Sources> | undefined;
+let kept: ReadonlyMap<string, Source> | undefined;
 
-/** What a source key stands for; "from memory" for the key `memory`. */
-export function sourceWords(key: string): string {
-  if (key === 'memory') return 'from memory';
-  kept ??= Sources.parse(parse(readFileSync(join(process.cwd(), 'content', 'sources.yaml'), 'utf8')));
-  return kept[key]?.citation ?? key;
+/** What each source key stands for. */
+export function allSources(): ReadonlyMap<string, Source> {
+  return (kept ??= new Map(
+    Object.entries(readContent('content/sources.yaml', z.record(z.string(), Source))),
+  ));
+}
+
+/** A source as it stands beside a fact; what is no key ("common practice, no source") stands as it is. */
+export const sourceWords = (key: string): string => allSources().get(key)?.short ?? key;
+
+/** Sources that a species' facts were taken from, each once, in the order of the page; memory is none. */
+export function sourcesOf({ resprouts, woodDensity, season, cautions }: Species): Source[] {
+  const keys = new Set([
+    ...resprouts.sources,
+    ...resprouts.oldWoodSources,
+    ...(woodDensity ? [woodDensity.source] : []),
+    ...(season?.sources ?? []),
+    ...cautions.map(({ source }) => source),
+  ]);
+  keys.delete('memory');
+  return [...keys].flatMap((key) => allSources().get(key) ?? []);
 }
