@@ -1,13 +1,15 @@
 import type { Metadata } from 'next';
 import { FindSpecies } from '@/components/species/FindSpecies';
 import { SpeciesTable } from '@/components/species/SpeciesTable';
+import { allSpecies } from '@/lib/species/catalogue';
 import { findSpecies, type Narrowed } from '@/lib/species/find';
 
-export const metadata: Metadata = {
-  title: 'Species',
-  description:
-    'The catalogue: 207 trees and shrubs, how dense their wood is, and whether they resprout from old wood.',
-};
+export function generateMetadata(): Metadata {
+  return {
+    title: 'Species',
+    description: `The catalogue: ${allSpecies().length} trees, shrubs, palms and vines, how dense their wood is, and whether they resprout from old wood.`,
+  };
+}
 
 type Props = { searchParams: Promise<Record<string, string | string[] | undefined>> };
 

@@ -1,4 +1,5 @@
 import { z } from 'zod';
+import { Invalid } from '@/lib/errors/errors';
 import { Cursor, Limit, writeCursor } from '@/lib/lists/cursor';
 import { handler, json, route } from '@/lib/http/handler';
 import { findSpecies } from '@/lib/species/find';
@@ -19,12 +20,18 @@ export const { GET, HEAD, POST, PUT, PATCH, DELETE, OPTIONS } = route({
     async ({ query }) => {
       const found = findSpecies(query.q);
       // The catalogue does not change while the process runs, so a place in it is the slug that came last.
-      const start = query.cursor ? found.findIndex(({ slug }) => slug === query.cursor?.[1]) + 1 : 0;
+      const last = query.cursor?.[1];
+      const start = found.findIndex(({ slug }) => slug === last) + 1;
+      if (last !== undefined && start === 0) {
+        throw new Invalid([
+          { path: 'cursor', message: 'is not a cursor of this list; leave it out to start again' },
+        ]);
+      }
       const items = found.slice(start, start + query.limit);
-      const last = start + query.limit < found.length ? items.at(-1) : undefined;
+      const ending = start + query.limit < found.length ? items.at(-1) : undefined;
       return json({
         items: items.map(speciesView),
-        nextCursor: last ? writeCursor(['species', last.slug]) : null,
+        nextCursor: ending ? writeCursor(['species', ending.slug]) : null,
       });
     },
   ),
