@@ -1,6 +1,7 @@
 import { z } from 'zod';
 import type { Db } from '@/lib/database';
-import { Conflict, Invalid, Stale } from '@/lib/errors/errors';
+import { Conflict, Invalid } from '@/lib/errors/errors';
+import { allowRevision } from '@/lib/http/condition';
 import type { Actor } from '@/lib/people/actor';
 import { loadRevision } from './load';
 import { dropRevision, type Revision } from './revisions';
@@ -35,7 +36,7 @@ export async function decideEntry(
 ): Promise<void> {
   if (row.waitingId === null) throw new Conflict('Nothing of this entry waits on the bench any more.');
   const waiting = await loadRevision(db, row.waitingId);
-  if (ifMatch !== null && ifMatch !== waiting.number) throw new Stale(waiting.number);
+  allowRevision(ifMatch, waiting.number);
   if (decision.decision === 'return') await sendBack(db, row, decision);
   else await accept(db, moderator, row, waiting, decision);
 }

@@ -1,6 +1,7 @@
 import { isDeepStrictEqual } from 'node:util';
 import type { Db } from '@/lib/database';
-import { Conflict, Invalid, NotFound, Stale } from '@/lib/errors/errors';
+import { Conflict, Invalid, NotFound } from '@/lib/errors/errors';
+import { allowRevision, requireAbsence } from '@/lib/http/condition';
 import type { Actor } from '@/lib/people/actor';
 import { contradictions, readingLacks } from './consistency';
 import { loadRevision } from './load';
@@ -42,8 +43,8 @@ export async function saveReading(
   const reading: Reading = { ...body, id: readingId };
   const working = await loadRevision(db, row.workingId);
   const stored = working.content.readings.find(({ id }) => id === readingId);
-  if (!stored && ifMatch !== null) throw new NotFound('There is no such reading to change any more.');
-  if (stored && ifMatch !== null && ifMatch !== stored.revision) throw new Stale(stored.revision);
+  if (stored) allowRevision(ifMatch, stored.revision);
+  else requireAbsence(ifMatch);
   const cutDate = working.content.cut.date;
   if (stored && isDeepStrictEqual(plainReading(stored), reading)) {
     return { reading: stored, entryRevision: row.revision, cutDate, created: false };
@@ -77,7 +78,7 @@ export async function deleteReading(
   const working = await loadRevision(db, row.workingId);
   const stored = working.content.readings.find(({ id }) => id === readingId);
   if (!stored) throw new NotFound('There is no such reading in this entry.');
-  if (ifMatch !== null && ifMatch !== stored.revision) throw new Stale(stored.revision);
+  allowRevision(ifMatch, stored.revision);
   const remove: Edit = (content) => ({
     ...content,
     readings: content.readings.filter(({ id }) => id !== readingId),

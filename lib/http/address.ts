@@ -8,14 +8,28 @@ const SOCKET_HEADER = 'x-socket-address';
 // client sent there. So each request is marked with its socket's address as it arrives, over anything sent in that name.
 const shared = globalThis as typeof globalThis & { aftercutMarksSockets?: boolean };
 
-/** Starts marking requests with the address they came from. Called once, when the server starts. */
+/** Starts marking requests with the address they came from, and reading where they go. Called once, when the server starts. */
 export function markSocketAddresses(): void {
   if (shared.aftercutMarksSockets) return;
   shared.aftercutMarksSockets = true;
   subscribe('http.server.request.start', (message) => {
     const { request } = message as { request: IncomingMessage };
     request.headers[SOCKET_HEADER] = request.socket.remoteAddress ?? '';
+    request.url = readableAddress(request.url ?? '/');
   });
+}
+
+/** Where an address leads that is not valid percent-encoding, which Next.js itself would answer with a bare 500. */
+export const MALFORMED_ADDRESS = '/api/malformed-address';
+
+function readableAddress(url: string): string {
+  const [path = '/'] = url.split('?');
+  try {
+    decodeURIComponent(path);
+    return url;
+  } catch {
+    return path.startsWith('/api/') ? MALFORMED_ADDRESS : '/malformed-address';
+  }
 }
 
 /**

@@ -3,6 +3,7 @@ import { EntryView } from '@/lib/entries/schema';
 import { submitEntry } from '@/lib/entries/submit';
 import { entryViews } from '@/lib/entries/view';
 import { findEntry } from '@/lib/entries/visibility';
+import { allowRevision } from '@/lib/http/condition';
 import { handler, json, route } from '@/lib/http/handler';
 
 export const { GET, HEAD, POST, PUT, PATCH, DELETE, OPTIONS } = route({
@@ -14,7 +15,8 @@ export const { GET, HEAD, POST, PUT, PATCH, DELETE, OPTIONS } = route({
       output: EntryView,
       find: findToChange,
     },
-    async ({ db, actor, params, subject, audit }) => {
+    async ({ db, actor, params, subject, ifMatch, audit }) => {
+      allowRevision(ifMatch, subject.row.revision);
       await submitEntry(db, subject.row);
       await audit({ action: 'entry.submitted', subject: { kind: 'entry', id: params.id } });
       const now = await findEntry(db, actor, params.id);
