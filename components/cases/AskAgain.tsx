@@ -1,13 +1,18 @@
 'use client';
 
 import { useRouter } from 'next/navigation';
-import { useRef, useTransition, type ReactNode } from 'react';
+import { useEffect, useRef, useTransition, type ReactNode } from 'react';
+import { isChanged } from '@/components/form/changed';
 
 /** The form around the question: asks again as soon as a word changes. Without a script its button does. */
 export function AskAgain({ children }: { children: ReactNode }) {
   const router = useRouter();
   const form = useRef<HTMLFormElement>(null);
   const [asking, start] = useTransition();
+  useEffect(() => {
+    // A word may have been changed before this script was there to hear of it.
+    if (form.current && isChanged(form.current)) form.current.requestSubmit();
+  }, []);
   const ask = () => {
     if (!form.current?.reportValidity()) return;
     const words = new URLSearchParams();

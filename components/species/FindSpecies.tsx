@@ -2,6 +2,7 @@
 
 import { useRouter } from 'next/navigation';
 import { useEffect, useRef, useTransition } from 'react';
+import { isChanged } from '@/components/form/changed';
 
 const PAUSE_MS = 150;
 
@@ -11,7 +12,11 @@ export function FindSpecies({ q, wood, oldWood }: { q: string; wood: string; old
   const form = useRef<HTMLFormElement>(null);
   const pause = useRef<ReturnType<typeof setTimeout>>(undefined);
   const [finding, start] = useTransition();
-  useEffect(() => () => clearTimeout(pause.current), []);
+  useEffect(() => {
+    // A name may have been typed before this script was there to hear of it.
+    if (form.current && isChanged(form.current)) form.current.requestSubmit();
+    return () => clearTimeout(pause.current);
+  }, []);
 
   const find = () => {
     if (!form.current) return;
