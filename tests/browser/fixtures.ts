@@ -17,6 +17,8 @@ type Fixtures = {
     demo: (who: Demo) => Promise<Someone>;
     /** A grower whom no other test knows. */
     newGrower: (name?: string) => Promise<Someone>;
+    /** The same grower at another browser. */
+    elsewhere: (grower: Someone) => Promise<Someone>;
   };
 };
 
@@ -60,6 +62,11 @@ export const test = base.extend<Fixtures>({
         const answer = await someone.context.request.post('/api/sign-up', { data });
         expect(answer.status(), await answer.text()).toBe(201);
         await signIn(someone.context, someone.email, PASSWORD);
+        return someone;
+      },
+      elsewhere: async ({ name, email }) => {
+        const someone = await open(name, email);
+        await signIn(someone.context, email, PASSWORD);
         return someone;
       },
     });
