@@ -30,9 +30,7 @@ export function Cautions({ species }: { species: Species }) {
         )}
         <p>
           {general.map(({ code, title, text }) => (
-            <span key={code}>
-              <strong>{title}</strong> {text}{' '}
-            </span>
+            <span key={code}>{`${title} ${text} `}</span>
           ))}
           <a href="/guides/working-safely">More on working safely</a>.
           <SourceNote said={[...new Set(general.map(({ source }) => source))]} />
