@@ -10,11 +10,17 @@ export function AskAgain({ children }: { children: ReactNode }) {
   const form = useRef<HTMLFormElement>(null);
   const [asking, start] = useTransition();
   useEffect(() => {
+    const here = form.current;
+    if (!here) return;
+    const again = () => here.requestSubmit();
     // A word may have been changed before this script was there to hear of it.
-    if (form.current && isChanged(form.current)) form.current.requestSubmit();
+    if (isChanged(here)) again();
+    // The sentence is markup, in which React hears no change.
+    here.addEventListener('change', again);
+    return () => here.removeEventListener('change', again);
   }, []);
   const ask = () => {
-    if (!form.current?.reportValidity()) return;
+    if (!form.current) return;
     const words = new URLSearchParams();
     new FormData(form.current).forEach((value, name) => words.set(name, String(value)));
     start(() => router.replace(`/?${words}`, { scroll: false }));
@@ -24,7 +30,6 @@ export function AskAgain({ children }: { children: ReactNode }) {
       ref={form}
       action="/"
       method="get"
-      onChange={ask}
       onSubmit={(event) => {
         event.preventDefault();
         ask();
