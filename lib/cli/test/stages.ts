@@ -16,7 +16,7 @@ type Stage = (typeof STAGES)[number];
 // Apart from .next, which a start may be building just now.
 const TYPE_CHECK = [
   ['next', 'typegen'],
-  ['tsc', '--noEmit', '--project', 'tsconfig.check.json'],
+  ['tsc', '--noEmit', '--project', 'tests/tsconfig.json'],
 ];
 const LINT = [
   ['eslint', '.', '--max-warnings=0'],
